@@ -1,0 +1,25 @@
+/**
+ * The single-diode circuit of a whole module or array at one irradiance and temperature:
+ *
+ *     I = IL - I0 (exp((V + I Rs)/a) - 1) - (V + I Rs)/Rsh
+ *
+ * Every solver here works in the junction voltage x = V + I Rs, where I(x) and V(x) are explicit, and with ln I0, so
+ * that exponents above 709 do not overflow. Photocurrent 0 is darkness: every current, voltage and power is then 0.
+ */
+export interface Circuit {
+  /** IL, A. */
+  photocurrent: number;
+  /** ln(I0 / 1 A). */
+  logSaturationCurrent: number;
+  /** a = n Ns k T/q of all cells in series, V. */
+  idealityVoltage: number;
+  /** Rs, ohm. May be 0. */
+  seriesResistance: number;
+  /** 1/Rsh, siemens. 0 is an infinite shunt resistance. */
+  shuntConductance: number;
+}
+
+/** A dark circuit to be written into. */
+export function emptyCircuit(): Circuit {
+  return { photocurrent: 0, logSaturationCurrent: -20, idealityVoltage: 1, seriesResistance: 0, shuntConductance: 0 };
+}

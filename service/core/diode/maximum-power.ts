@@ -1,0 +1,74 @@
+import type { Circuit } from "./circuit.ts";
+
+/** A voltage (V), a current (A) and their power (W). */
+export interface OperatingPoint {
+  voltage: number;
+  current: number;
+  power: number;
+}
+
+const MAXIMUM_STEPS = 64;
+/** A Halley step this small, in units of a, leaves an error below 1e-15 a (cubic convergence). */
+const LAST_STEP = 1e-5;
+/** Beyond this ln(I0/IL) the power is below 1e-200 W: darkness. */
+const DARK = 460;
+
+/**
+ * Writes the maximum power point of a circuit into `point`; all 0 in the dark.
+ *
+ * In the reduced junction voltage u = x/a, with currents in units of IL: i(u) = 1 - b (e^u - 1) - h u and
+ * v(u) = u - r i(u), where b = I0/IL, r = Rs IL/a, h = a/(Rsh IL). The maximum is the root of (i v)' = 0, which is
+ * positive left of it and negative right of it, so a bracket guards every Halley step. The start is the ideal diode's
+ * closed form u = W0(e (1 + b)/b) - 1 by its asymptotic series (Corless et al., Adv. Comput. Math. 5 (1996) 329-359,
+ * eq. 4.18), where b e^u = (1 + b)/(1 + u) saves the first exponential.
+ *
+ * Accuracy: power within 1e-14 relative of the true maximum, voltage within 1e-13 relative. At most 64 steps; 2 or 3
+ * are usual.
+ */
+export function maximumPower(circuit: Circuit, point: OperatingPoint): void {
+  const { photocurrent, idealityVoltage: a, seriesResistance, shuntConductance } = circuit;
+  const logRatio = circuit.logSaturationCurrent - Math.log(photocurrent);
+  if (!(photocurrent > 0) || logRatio > DARK) {
+    point.voltage = point.current = point.power = 0;
+    return;
+  }
+  const b = Math.exp(logRatio);
+  const r = (seriesResistance * photocurrent) / a;
+  const h = (shuntConductance * a) / photocurrent;
+  // ln((1 + b)/b) without losing digits where b is large.
+  const openCircuit = b > 1 ? Math.log1p(1 / b) : Math.log1p(b) - logRatio;
+  const l = 1 + openCircuit;
+  const ll = Math.log(l);
+  let u = l - ll + ll / l - 1;
+  let diode = (1 + b) / (1 + u);
+  let low = 0;
+  let high = openCircuit;
+  let current = 0;
+  for (let step = 0; step < MAXIMUM_STEPS; step++) {
+    current = 1 + b - diode - h * u;
+    const voltage = u - r * current;
+    const di = -diode - h;
+    const dv = 1 - r * di;
+    const slope = di * voltage + current * dv;
+    const slope1 = 2 * di * dv - diode * (voltage - r * current);
+    const slope2 = -diode * (voltage + 3 * dv - 3 * r * di - r * current);
+    // The first exponential is the ideal diode's, not that of this u: it neither brackets nor ends the search.
+    if (step > 0 && slope > 0) low = u;
+    else if (step > 0) high = u;
+    const newton = slope / slope1;
+    let change = newton / (1 - (0.5 * newton * slope2) / slope1);
+    let next = u - change;
+    if (!(next >= low && next <= high)) {
+      next = 0.5 * (low + high);
+      change = u - next;
+    }
+    u = next;
+    if (step > 0 && Math.abs(change) <= LAST_STEP) break;
+    diode = b > 1e-3 ? b + b * Math.expm1(u) : b * Math.exp(u);
+  }
+  const junction = b > 1e-3 ? b * Math.expm1(u) : b * Math.exp(u) - b;
+  current = 1 - junction - h * u;
+  point.voltage = Math.max(0, (u - r * current) * a);
+  point.current = current * photocurrent;
+  point.power = point.voltage * point.current;
+}

@@ -1,0 +1,14 @@
+import type { Direction, Seen } from "./rule.ts";
+
+/**
+ * The decision of a climber that compares powers: turn where the last power is lower than the one before, or where
+ * the window cut the last step short; equal powers keep the direction; without power, down. Before there is an
+ * earlier power (NaN) the direction is kept.
+ * Source: Femia, Petrone, Spagnuolo & Vitelli, IEEE Trans. Power Electron. 20(4) (2005) 963-973 (from memory).
+ */
+export function climbByPower(seen: Seen): Direction {
+  const power = seen.voltage * seen.current;
+  if (power <= 0 && seen.voltage > 0) return -1;
+  const lower = power < seen.earlierVoltage * seen.earlierCurrent;
+  return lower || seen.cut ? (-seen.direction as Direction) : seen.direction;
+}

@@ -1,0 +1,193 @@
+import type { PhotovoltaicArray } from "../array/array.ts";
+import { conditionIsc, conditionVoc, emptyCondition, enterCondition } from "../array/condition.ts";
+import type { PointTrace } from "../array/maximum-power-trace.ts";
+import { voltageAtCurrent } from "../diode/junction-at-current.ts";
+import type { OperatingPoint } from "../diode/maximum-power.ts";
+import { parabolicPeak } from "../numeric/parabolic-peak.ts";
+import type { ClimbingRule, Sampling, TargetRule, TrackingRule } from "../rules/rule.ts";
+import type { Cascade } from "./causes.ts";
+import type { Converter } from "./converter.ts";
+import { isExact, readingOf, valueReadAs } from "./converter.ts";
+import type { Ledger } from "./ledger.ts";
+import { CLASS_COLUMNS, enterOperating, enterSample, irradianceClass } from "./ledger.ts";
+import { addMeanOver } from "./mean-over-voltage.ts";
+import { ownOrbit } from "./own-orbit.ts";
+import { Terminals } from "./terminals.ts";
+import { threeLevelOrbit } from "./three-level-orbit.ts";
+
+/** Weather a sample, each column of shape [n]. */
+export interface Weather {
+  /** Plane of array, W/m2. */
+  irradiance: Float64Array;
+  /** degC. */
+  cellTemperature: Float64Array;
+  /** 1 where a sample is left out of every sum; null for none. */
+  skipped: Uint8Array | null;
+  /** Index of each sample's month, from 0. */
+  monthOf: Uint16Array;
+}
+
+/** A rule on its converter, and where its sums go. */
+export interface Contender {
+  rule: TrackingRule;
+  converter: Converter;
+  ledger: Ledger;
+}
+
+/**
+ * Tracks every contender over the weather, each sample at rest, in one pass: the circuit and its maximum are solved
+ * once a sample for all of them.
+ * @param maximum receives the array's maximum power point, each column of shape [n]; null to leave it
+ */
+export function trackSteady(
+  array: PhotovoltaicArray,
+  weather: Weather,
+  contenders: readonly Contender[],
+  maximum: PointTrace | null,
+): void {
+  const { irradiance, cellTemperature, skipped, monthOf } = weather;
+  const condition = emptyCondition();
+  const seats = contenders.map((contender) => ({ ...contender, terminals: new Terminals(contender.converter) }));
+  const cascade = emptyCascade();
+  const point = { voltage: 0, current: 0, power: 0 };
+  const place = { sample: 0, month: 0, irradianceClass: 0 };
+
+  for (let i = 0; i < irradiance.length; i++) {
+    if (skipped !== null && skipped[i] === 1) continue;
+    place.sample = i;
+    place.month = monthOf[i];
+    place.irradianceClass = irradianceClass(irradiance[i]);
+    for (const { ledger } of seats) ledger.classes[place.irradianceClass * CLASS_COLUMNS]++;
+    if (!(irradiance[i] > 0)) continue;
+    enterCondition(condition, array, irradiance[i], cellTemperature[i]);
+    if (condition.maximum.power <= 0) continue;
+    if (maximum !== null) {
+      maximum.voltage[i] = condition.maximum.voltage;
+      maximum.current[i] = condition.maximum.current;
+      maximum.power[i] = condition.maximum.power;
+    }
+    for (const { rule, ledger, terminals } of seats) {
+      terminals.enter(condition);
+      trackSample(rule, terminals, i, cascade, point);
+      enterSample(ledger, place, cascade, terminals.clipped);
+      enterOperating(ledger, i, point);
+    }
+  }
+}
+
+function emptyCascade(): Cascade {
+  return { available: 0, best: 0, localPeak: 0, fresh: 0, held: 0, operating: 0, interrupted: 0 };
+}
+
+/** Writes the cascade and the operating point of one rule in one lit sample. */
+function trackSample(
+  rule: TrackingRule,
+  terminals: Terminals,
+  sample: number,
+  cascade: Cascade,
+  point: OperatingPoint,
+): void {
+  cascade.available = terminals.available;
+  cascade.best = cascade.localPeak = terminals.best;
+  cascade.interrupted = 0;
+  if (rule.behaviour === "perfect") {
+    terminals.operateWithoutRipple(terminals.bestVoltage, point);
+    cascade.fresh = cascade.held = cascade.operating = terminals.best;
+    return;
+  }
+  if (rule.behaviour === "target") holdTarget(rule, terminals, sample, cascade, point);
+  else climb(rule, terminals, cascade, point);
+  cascade.operating = point.power;
+  cascade.interrupted = interruptedShare(rule.sampling);
+  if (terminals.available < terminals.converter.wakePower) sleep(terminals, cascade, point);
+  point.current *= 1 - cascade.interrupted;
+  point.power *= 1 - cascade.interrupted;
+}
+
+/** Asleep: open circuit, nothing delivered; the power it would have held is interrupted. */
+function sleep(terminals: Terminals, cascade: Cascade, point: OperatingPoint): void {
+  cascade.interrupted = 1;
+  point.voltage = conditionVoc(terminals.condition);
+}
+
+/** Share of the time that sampling interrupts the power: exact in steady light. */
+function interruptedShare(sampling: Sampling | null): number {
+  return sampling === null || sampling.pilot ? 0 : sampling.duration / sampling.period;
+}
+
+function holdTarget(
+  rule: TargetRule,
+  terminals: Terminals,
+  sample: number,
+  cascade: Cascade,
+  point: OperatingPoint,
+): void {
+  const outside = typeof rule.outside === "number" ? rule.outside : rule.outside[sample];
+  const reading = rule.sampling === null ? 0 : read(rule.sampling, terminals);
+  const wanted = rule.reference(reading, terminals.condition.cellTemperature, outside);
+  const fresh = terminals.clamp(targetVoltage(rule, terminals, wanted));
+  if (rule.step > 0) {
+    point.voltage = point.current = point.power = 0;
+    addMeanOver(terminals, [fresh - rule.step, fresh + rule.step], 1, point);
+    cascade.fresh = cascade.held = terminals.power(fresh);
+    return;
+  }
+  terminals.operate(fresh, point);
+  cascade.fresh = cascade.held = terminals.converter.rippleAmplitude > 0 ? terminals.power(fresh) : point.power;
+}
+
+/** The terminal voltage (V) at which the rule's sensor reads what it wants; 0 where the array gives less current. */
+function targetVoltage(rule: TargetRule, terminals: Terminals, wanted: number): number {
+  const { voltageSensor, currentSensor } = terminals.converter;
+  if (rule.regulates === "voltage") return rule.sensed ? valueReadAs(voltageSensor, wanted) : wanted;
+  const current = rule.sensed ? valueReadAs(currentSensor, wanted) : wanted;
+  if (current >= conditionIsc(terminals.condition)) return 0;
+  return Math.max(0, voltageAtCurrent(terminals.condition.circuit, current));
+}
+
+/** What a sample reads in this condition, through the sensor: V or A. */
+function read(sampling: Sampling, terminals: Terminals): number {
+  const { voltageSensor, currentSensor } = terminals.converter;
+  switch (sampling.reads) {
+    case "open-circuit-voltage":
+      return readingOf(voltageSensor, conditionVoc(terminals.condition));
+    case "short-circuit-current":
+      return readingOf(currentSensor, conditionIsc(terminals.condition));
+    case "best-swept-voltage":
+      return bestSwept(sampling.points, terminals);
+  }
+}
+
+/** The voltage (V) of the highest power read at `points` voltages equally spaced over window and [0, Voc]. */
+function bestSwept(points: number, terminals: Terminals): number {
+  const { voltageSensor, currentSensor, trackingMinimumVoltage, trackingMaximumVoltage } = terminals.converter;
+  const low = Math.max(0, trackingMinimumVoltage);
+  const high = Math.max(low, Math.min(trackingMaximumVoltage, conditionVoc(terminals.condition)));
+  const point = { voltage: 0, current: 0, power: 0 };
+  let best = low;
+  let bestPower = Number.NEGATIVE_INFINITY;
+  for (let k = 0; k < points; k++) {
+    const voltage = low + ((high - low) * k) / (points - 1);
+    terminals.operate(voltage, point);
+    const power = readingOf(voltageSensor, voltage) * readingOf(currentSensor, point.current);
+    if (power > bestPower) {
+      best = voltage;
+      bestPower = power;
+    }
+  }
+  return best;
+}
+
+function climb(rule: ClimbingRule, terminals: Terminals, cascade: Cascade, point: OperatingPoint): void {
+  const { voltageSensor, currentSensor, rippleAmplitude } = terminals.converter;
+  cascade.fresh = cascade.held = terminals.best;
+  if (rule.orbit === "own" || !isExact(voltageSensor) || !isExact(currentSensor)) {
+    ownOrbit(terminals, rule, point);
+    return;
+  }
+  let peak = terminals.bestVoltage;
+  if (rippleAmplitude > 0) {
+    peak = terminals.clamp(parabolicPeak((v) => terminals.ripplingPower(v), peak, 0.02 * peak));
+  }
+  threeLevelOrbit(terminals, peak, rule.step, point);
+}

@@ -1,0 +1,136 @@
+import { calendarOf } from "../climate/calendar.ts";
+import type { ClimateSeries, PreparedClimate } from "../climate/climate-series.ts";
+import { prepareClimate, sampleCount } from "../climate/climate-series.ts";
+import type { Layout, PhotovoltaicArray } from "../core/array/array.ts";
+import { photovoltaicArray } from "../core/array/array.ts";
+import type { PointTrace } from "../core/array/maximum-power-trace.ts";
+import { emptyTrace } from "../core/array/maximum-power-trace.ts";
+import type { RuleChoice } from "../core/rules/index.ts";
+import { completeSettings, prepareRule } from "../core/rules/index.ts";
+import type { Settings } from "../core/rules/rule.ts";
+import type { Ledger, TraceChoice } from "../core/tracking/ledger.ts";
+import { openLedger } from "../core/tracking/ledger.ts";
+import { trackSteady } from "../core/tracking/steady.ts";
+import type { ConverterChoice } from "./converter-choice.ts";
+import { buildConverter } from "./converter-choice.ts";
+import type { EnergySummary } from "./energy.ts";
+import { summarize } from "./energy.ts";
+import type { BuiltModule, ModuleChoice } from "./module-choice.ts";
+import { buildModule } from "./module-choice.ts";
+import { checkRule } from "./rule-relations.ts";
+import { StudyError } from "./study-error.ts";
+
+/** How the rules are computed: sample by sample at rest, or as the study finds fit. */
+export type Mode = "auto" | "steady";
+
+/** What every study over a climate asks of one array. */
+export interface TrackingRequest {
+  module: ModuleChoice;
+  array: Layout;
+  climate: ClimateSeries;
+  mode: Mode;
+}
+
+/** One rule on one converter. `pointer` is where the rule stands in the request. */
+export interface Candidate {
+  rule: RuleChoice;
+  converter: ConverterChoice;
+  pointer: string;
+}
+
+/** How many samples there were, and how many counted. */
+export interface Coverage {
+  samples: number;
+  used: number;
+  skipped: number;
+}
+
+/** A candidate with its defaults filled in and its sums. */
+export interface Tracked extends EnergySummary {
+  rule: { kind: RuleChoice["kind"]; settings: Settings };
+  converter: ConverterChoice;
+  ledger: Ledger;
+}
+
+/** What a run found, shared by all its candidates but `tracked`. */
+export interface TrackingRun {
+  built: BuiltModule;
+  array: PhotovoltaicArray;
+  climate: PreparedClimate;
+  coverage: Coverage;
+  mode: "steady";
+  modeReason: string;
+  maximum: PointTrace | null;
+  tracked: Tracked[];
+}
+
+/** Which columns to keep. */
+export interface RunTraces extends TraceChoice {
+  maximum: boolean;
+}
+
+/**
+ * Tracks candidates over a climate in one pass.
+ * @throws StudyError for a module, rule or climate that physics refuses
+ */
+export function runTracking(request: TrackingRequest, candidates: Candidate[], traces: RunTraces): TrackingRun {
+  const built = buildModule(request.module);
+  const array = photovoltaicArray(built.module, request.array);
+  const climate = prepareClimate(request.climate);
+  const coverage = coverageOf(request.climate, climate);
+  const samples = coverage.samples;
+  const { months, monthOf } = calendarOf(
+    request.climate.start,
+    request.climate.utcOffset,
+    request.climate.step,
+    samples,
+  );
+  const ruleArray = { modulesInSeries: request.array.modulesInSeries, standard: array.standard };
+  const contenders = candidates.map((candidate) => {
+    const settings = completeSettings(candidate.rule, ruleArray);
+    checkRule(candidate.rule.kind, settings, samples, candidate.pointer);
+    return {
+      settings,
+      rule: prepareRule(candidate.rule.kind, settings, ruleArray),
+      converter: buildConverter(candidate.converter, array.standard),
+      ledger: openLedger(samples, months.length, traces),
+    };
+  });
+  const maximum = traces.maximum ? emptyTrace(samples) : null;
+  trackSteady(array, { ...climate, monthOf }, contenders, maximum);
+  const insolation = insolationOf(climate, request.climate.step);
+  const tracked = contenders.map(({ settings, ledger }, index) => ({
+    rule: { kind: candidates[index].rule.kind, settings },
+    converter: candidates[index].converter,
+    ledger,
+    ...summarize(ledger, months, request.climate.step, insolation),
+  }));
+  return { built, array, climate, coverage, mode: "steady", modeReason: reasonOf(request.mode), maximum, tracked };
+}
+
+function reasonOf(mode: Mode): string {
+  return mode === "steady" ? "asked for" : "each sample is taken at rest";
+}
+
+function coverageOf(series: ClimateSeries, climate: PreparedClimate): Coverage {
+  const samples = sampleCount(series);
+  let skipped = 0;
+  if (climate.skipped !== null) for (const one of climate.skipped) skipped += one;
+  if (skipped > 0 && series.gaps === "refuse") {
+    throw new StudyError(
+      "missing-samples",
+      "/climate",
+      `${skipped} of ${samples} samples are missing; fill them, or send "gaps": "skip" to leave them out of every sum.`,
+    );
+  }
+  return { samples, used: samples - skipped, skipped };
+}
+
+/** kWh/m2 over the samples that count. */
+function insolationOf(climate: PreparedClimate, step: number): number {
+  let sum = 0;
+  for (let i = 0; i < climate.irradiance.length; i++) {
+    if (climate.skipped === null || climate.skipped[i] === 0) sum += climate.irradiance[i];
+  }
+  return (sum * step) / 3.6e6;
+}
