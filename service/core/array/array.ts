@@ -51,6 +51,7 @@ export function photovoltaicArray(module: Module, layout: Layout): PhotovoltaicA
     if (circuit.photocurrent <= 0) return;
     circuit.photocurrent *= stringsInParallel;
     circuit.logSaturationCurrent += logStrings;
+    circuit.saturationCurrent *= stringsInParallel;
     circuit.idealityVoltage *= modulesInSeries;
     circuit.seriesResistance = circuit.seriesResistance * resistanceScale + wiringResistance;
     circuit.shuntConductance /= resistanceScale;

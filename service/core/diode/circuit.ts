@@ -17,9 +17,25 @@ export interface Circuit {
   seriesResistance: number;
   /** 1/Rsh, siemens. 0 is an infinite shunt resistance. */
   shuntConductance: number;
+  /** I0, A: the exponential of `logSaturationCurrent`, kept beside it because every current needs it. */
+  saturationCurrent: number;
+}
+
+/** What a circuit is stated by. */
+export type CircuitParameters = Omit<Circuit, "saturationCurrent">;
+
+/** A circuit from its five parameters. */
+export function circuitOf(parameters: CircuitParameters): Circuit {
+  return { ...parameters, saturationCurrent: Math.exp(parameters.logSaturationCurrent) };
 }
 
 /** A dark circuit to be written into. */
 export function emptyCircuit(): Circuit {
-  return { photocurrent: 0, logSaturationCurrent: -20, idealityVoltage: 1, seriesResistance: 0, shuntConductance: 0 };
+  return circuitOf({
+    photocurrent: 0,
+    logSaturationCurrent: -20,
+    idealityVoltage: 1,
+    seriesResistance: 0,
+    shuntConductance: 0,
+  });
 }

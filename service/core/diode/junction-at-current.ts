@@ -1,8 +1,8 @@
 import type { Circuit } from "./circuit.ts";
 
 const MAXIMUM_STEPS = 64;
-/** A Halley step this small, in units of a, leaves an error below 1e-15 a (cubic convergence). */
-const LAST_STEP = 1e-5;
+/** A Halley step this small, in units of a, leaves an error below 1e-13 a (cubic convergence). */
+const LAST_STEP = 1e-4;
 
 /**
  * Junction voltage x (V) at which the circuit carries `current` (A): the root of I0 e^{x/a} + x/Rsh = IL + I0 - I.
@@ -12,21 +12,22 @@ const LAST_STEP = 1e-5;
  * usual. A current beyond IL + I0 needs a negative junction voltage, and -Infinity where there is no shunt to carry it.
  */
 export function junctionAtCurrent(circuit: Circuit, current: number): number {
-  const { photocurrent, logSaturationCurrent, idealityVoltage: a, shuntConductance } = circuit;
-  const saturation = Math.exp(logSaturationCurrent);
-  const through = photocurrent + saturation - current;
+  const { logSaturationCurrent, idealityVoltage: a, shuntConductance } = circuit;
+  const through = circuit.photocurrent + circuit.saturationCurrent - current;
   if (through <= 0 && shuntConductance === 0) return Number.NEGATIVE_INFINITY;
 
   let x = Number.POSITIVE_INFINITY;
   if (through > 0) x = a * (Math.log(through) - logSaturationCurrent);
-  if (shuntConductance > 0) x = Math.min(x, through / shuntConductance);
+  if (shuntConductance === 0) return x;
+  x = Math.min(x, through / shuntConductance);
+  let diode = Math.exp(logSaturationCurrent + x / a);
   for (let step = 0; step < MAXIMUM_STEPS; step++) {
-    const diode = Math.exp(logSaturationCurrent + x / a);
     const slope = diode / a + shuntConductance;
     const newton = (diode + shuntConductance * x - through) / slope;
     const change = newton / Math.max(0.5, 1 - (0.5 * newton * diode) / (a * a * slope));
     x -= change;
     if (Math.abs(change) <= LAST_STEP * a) break;
+    diode = Math.exp(logSaturationCurrent + x / a);
   }
   return x;
 }

@@ -54,6 +54,7 @@ function translate(of: SingleDiodeParameters, irradiance: number, cellTemperatur
   circuit.photocurrent = share * Math.max(0, of.photocurrent + of.photocurrentCoefficient * rise);
   circuit.logSaturationCurrent =
     of.logSaturationCurrent + logSaturationRise(cellTemperature, of.bandgap, of.bandgapCoefficient);
+  circuit.saturationCurrent = Math.exp(circuit.logSaturationCurrent);
   circuit.idealityVoltage = (of.idealityVoltage * (cellTemperature + ZERO_CELSIUS)) / REFERENCE_KELVIN;
   circuit.seriesResistance = of.seriesResistance;
   circuit.shuntConductance = of.shuntConductance * share;

@@ -77,6 +77,7 @@ export function testGeneratorModule(parameters: TestGeneratorParameters): Module
     const voltage = standardOpenCircuitVoltage * (1 + of.voltageCoefficient * rise) * light;
     circuit.photocurrent = standardShortCircuitCurrent * share * (1 + of.currentCoefficient * rise);
     circuit.logSaturationCurrent = logSaturation + Math.log(share);
+    circuit.saturationCurrent = Math.exp(circuit.logSaturationCurrent);
     circuit.idealityVoltage = voltage * curvature;
     circuit.seriesResistance = 0;
     circuit.shuntConductance = 0;

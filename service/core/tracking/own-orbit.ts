@@ -2,8 +2,9 @@ import { conditionVoc } from "../array/condition.ts";
 import { currentAt } from "../diode/current.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
 import { bracketedRoot } from "../numeric/bracketed-root.ts";
-import type { ClimbingRule, Seen } from "../rules/rule.ts";
-import { isExact, readingOf } from "./converter.ts";
+import type { ClimbingRule } from "../rules/rule.ts";
+import { climbOn, firstSight } from "./climber.ts";
+import { isExact } from "./converter.ts";
 import { addPoint } from "./mean-over-voltage.ts";
 import type { Terminals } from "./terminals.ts";
 
@@ -12,16 +13,15 @@ const STARTS = 64;
 /** Steps above its resting edge at which a climber's way down is joined: true sensors, and others. */
 const MARGIN = 2;
 const SENSOR_MARGIN = 8;
-/** Control periods after which the orbit is taken as reached, and over which it is averaged. */
-const SETTLE = 48;
-const AVERAGE = 96;
+/** Most control periods followed from one start. */
+const MOST_PERIODS = 192;
 
 /**
  * Writes the mean operating point of a climber at rest in steady light: its own decisions, entered from open circuit
  * (or the window's upper edge), averaged over 64 start offsets of one step. What the rule sees goes through its sensors.
  *
- * The way down from open circuit is joined near the peak, on the lattice it would have reached. An orbit that repeats
- * within 96 periods is averaged to within one period of it. At most 64 x 152 evaluations.
+ * The way down from open circuit is joined near the peak, on the lattice it would have reached. The orbit is averaged
+ * over exactly one turn; one that does not close within 192 periods, over its last half. At most 64 x 192 evaluations.
  */
 export function ownOrbit(terminals: Terminals, rule: ClimbingRule, mean: OperatingPoint): void {
   mean.voltage = mean.current = mean.power = 0;
@@ -48,35 +48,38 @@ function restingEdge(terminals: Terminals, { step, restTolerance }: ClimbingRule
   return Math.max(terminals.converter.trackingMinimumVoltage, Number.isNaN(edge) ? voc : edge);
 }
 
+/** Adds 1/64 of the mean point of the orbit entered at `from` (V). */
 function addOrbit(terminals: Terminals, rule: ClimbingRule, from: number, mean: OperatingPoint): void {
-  const { voltageSensor, currentSensor } = terminals.converter;
   const point = { voltage: 0, current: 0, power: 0 };
-  const sum = { voltage: 0, current: 0, power: 0 };
-  const seen: Seen = {
-    earlierVoltage: Number.NaN,
-    earlierCurrent: Number.NaN,
-    voltage: 0,
-    current: 0,
-    direction: -1,
-    cut: false,
-  };
+  const turn = { voltage: 0, current: 0, power: 0 };
+  const seen = firstSight();
   let voltage = terminals.clamp(from);
-  for (let period = 0; period < SETTLE + AVERAGE; period++) {
-    terminals.operate(voltage, point);
-    if (period >= SETTLE) addPoint(sum, point, 1);
-    seen.voltage = readingOf(voltageSensor, voltage);
-    seen.current = readingOf(currentSensor, point.current);
-    seen.direction = rule.decide(seen);
-    seen.earlierVoltage = seen.voltage;
-    seen.earlierCurrent = seen.current;
-    const wanted = voltage + seen.direction * rule.step;
-    voltage = terminals.clamp(wanted);
-    seen.cut = voltage !== wanted;
-    if (seen.direction === 0 && period < SETTLE) {
-      // At rest in steady light nothing moves any more.
-      addPoint(mean, point, 1 / STARTS);
+  // A turn is closed when voltage, the one before and the direction recur: all that a decision depends on. The state
+  // compared with is moved to the present at each power of two, so that any turn is found (Brent, BIT 20 (1980) 176).
+  let mark = { voltage: Number.NaN, earlier: Number.NaN, direction: 0, period: 0 };
+  let earlier = Number.NaN;
+  for (let period = 0; period < MOST_PERIODS; period++) {
+    const closed =
+      same(voltage, mark.voltage, rule.step) &&
+      same(earlier, mark.earlier, rule.step) &&
+      seen.direction === mark.direction;
+    if (closed) {
+      addPoint(mean, turn, 1 / (STARTS * (period - mark.period)));
       return;
     }
+    if ((period & (period - 1)) === 0) {
+      mark = { voltage, earlier, direction: seen.direction, period };
+      turn.voltage = turn.current = turn.power = 0;
+    }
+    terminals.operate(voltage, point);
+    addPoint(turn, point, 1);
+    earlier = voltage;
+    voltage = climbOn(rule, terminals, seen, [voltage, point.current]);
   }
-  addPoint(mean, sum, 1 / (STARTS * AVERAGE));
+  addPoint(mean, turn, 1 / (STARTS * (MOST_PERIODS - mark.period)));
+}
+
+/** Whether two voltages are the same level of the lattice. */
+function same(voltage: number, other: number, step: number): boolean {
+  return Math.abs(voltage - other) <= 1e-9 * step;
 }
