@@ -5,6 +5,7 @@ import type { SingleDiodeParameters } from "../core/module/single-diode.ts";
 import { singleDiodeModule } from "../core/module/single-diode.ts";
 import type { TestGeneratorParameters } from "../core/module/test-generator.ts";
 import { testGeneratorModule } from "../core/module/test-generator.ts";
+import { nearestDatasheetFit } from "./nearest-datasheet-fit.ts";
 import { StudyError } from "./study-error.ts";
 
 /** A module as it was described; SI units, coefficients in A/K and V/K. */
@@ -27,7 +28,8 @@ export interface BuiltModule {
 
 /**
  * The module of a choice.
- * @throws StudyError `inconsistent-datasheet` when no circuit meets the datasheet
+ * A datasheet that no circuit meets exactly gets the nearest, if that is within 2 % of every condition.
+ * @throws StudyError `inconsistent-datasheet` when it is not
  */
 export function buildModule(choice: ModuleChoice): BuiltModule {
   switch (choice.kind) {
@@ -40,19 +42,25 @@ export function buildModule(choice: ModuleChoice): BuiltModule {
   }
 }
 
+/** Above this a circuit no longer stands for its datasheet. */
+const WORST_MISFIT = 0.02;
+
 function fromDatasheet(datasheet: Datasheet): BuiltModule {
   const exact = exactDatasheetFit(datasheet);
-  if (exact === null) {
+  if (exact !== null) {
+    const misfits = datasheetMisfits(datasheet, exact);
+    return { module: singleDiodeModule(exact), parameters: exact, fit: "exact", misfits };
+  }
+  const { parameters, misfits } = nearestDatasheetFit(datasheet);
+  const bad = Object.entries(misfits).filter(([, misfit]) => !(Math.abs(misfit) <= WORST_MISFIT));
+  if (bad.length > 0) {
+    const shown = Object.entries(misfits).map(([name, misfit]) => `${name} ${(100 * misfit).toFixed(2)} %`);
     throw new StudyError(
       "inconsistent-datasheet",
       "/module",
-      "No single-diode circuit meets this datasheet's five values; check Vmp, Imp and the voltage coefficient against the sheet.",
+      `No single-diode circuit comes near this datasheet; the nearest misses by: ${shown.join(", ")}. Check ${bad.map(([name]) => name.replace("Slope", "Voltage")).join(", ")} against the sheet.`,
+      "values that one circuit can meet within 2 % each",
     );
   }
-  return {
-    module: singleDiodeModule(exact),
-    parameters: exact,
-    fit: "exact",
-    misfits: datasheetMisfits(datasheet, exact),
-  };
+  return { module: singleDiodeModule(parameters), parameters, fit: "nearest", misfits };
 }
