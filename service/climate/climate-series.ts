@@ -46,7 +46,7 @@ export function sampleCount(series: ClimateSeries): number {
 /** Irradiance on the modules and their cell temperature from a series; the series is left as it is. */
 export function prepareClimate(series: ClimateSeries): PreparedClimate {
   const { temperature } = series;
-  const irradiance = series.irradiance.values.map((value) => (value < 0 ? 0 : value));
+  const irradiance = series.irradiance.values.map((value) => Math.max(0, value));
   const assumptions: Assumption[] = [];
   let cellTemperature = temperature.values;
   let skipped = missing(irradiance, temperature.values);
@@ -56,7 +56,8 @@ export function prepareClimate(series: ClimateSeries): PreparedClimate {
     cellTemperature = cellTemperatures(temperature.model, irradiance, temperature.values, wind);
     skipped = missing(irradiance, cellTemperature);
   }
-  const coldest = temperature.values.reduce((least, value) => (value < least ? value : least), Infinity);
+  let coldest = Number.POSITIVE_INFINITY;
+  for (const value of temperature.values) if (value < coldest) coldest = value;
   return { irradiance, cellTemperature, skipped, coldest, assumptions };
 }
 

@@ -100,7 +100,7 @@ function placeOf(
     irradiance: Float64Array.of(request.irradiance),
     cellTemperature: Float64Array.of(request.cellTemperature),
     skipped: null,
-    monthOf: new Uint16Array(1),
+    spanOf: new Uint16Array(1),
   };
   trackSteady(array, weather, [contender], null);
   // One hour at rest: its Wh are the W of the place.

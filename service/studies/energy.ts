@@ -1,7 +1,7 @@
 import type { Cause } from "../core/tracking/causes.ts";
 import { CAUSES } from "../core/tracking/causes.ts";
 import type { Ledger } from "../core/tracking/ledger.ts";
-import { CLASS_COLUMNS, CLASS_WIDTH, MONTH_COLUMNS } from "../core/tracking/ledger.ts";
+import { CLASS_COLUMNS, CLASS_WIDTH, SPAN_COLUMNS } from "../core/tracking/ledger.ts";
 
 export type LostByCause = Record<Cause, number>;
 
@@ -50,12 +50,12 @@ export interface EnergySummary {
 /** Turns the sums of a ledger into energies: W times samples become kWh at `step` seconds a sample. */
 export function summarize(ledger: Ledger, months: readonly string[], step: number, insolation: number): EnergySummary {
   const toEnergy = step / 3.6e6;
-  const rows = months.map((month, index) => monthOf(ledger, index, month, toEnergy));
+  const rows = months.map((month, index) => monthEnergy(ledger, index, month, toEnergy));
   const lostByCause = zeroCauses();
   let [available, clipped] = [0, 0];
   for (const [index, row] of rows.entries()) {
     available += row.available;
-    clipped += ledger.months[index * MONTH_COLUMNS + 1] * toEnergy;
+    clipped += ledger.spans[index * SPAN_COLUMNS + 1] * toEnergy;
     for (const cause of CAUSES) lostByCause[cause] += row.lostByCause[cause];
   }
   const lost = total(lostByCause);
@@ -78,8 +78,8 @@ function total(lostByCause: LostByCause): number {
   return CAUSES.reduce((sum, cause) => sum + lostByCause[cause], 0);
 }
 
-function monthOf(ledger: Ledger, index: number, month: string, toEnergy: number): MonthEnergy {
-  const row = ledger.months.subarray(index * MONTH_COLUMNS, (index + 1) * MONTH_COLUMNS);
+function monthEnergy(ledger: Ledger, index: number, month: string, toEnergy: number): MonthEnergy {
+  const row = ledger.spans.subarray(index * SPAN_COLUMNS, (index + 1) * SPAN_COLUMNS);
   const lostByCause = zeroCauses();
   for (const [k, cause] of CAUSES.entries()) lostByCause[cause] = row[2 + k] * toEnergy;
   const available = row[0] * toEnergy;

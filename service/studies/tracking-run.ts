@@ -97,7 +97,7 @@ export function runTracking(request: TrackingRequest, candidates: Candidate[], t
     };
   });
   const maximum = traces.maximum ? emptyTrace(samples) : null;
-  trackSteady(array, { ...climate, monthOf }, contenders, maximum);
+  trackSteady(array, { ...climate, spanOf: monthOf }, contenders, maximum);
   const insolation = insolationOf(climate, request.climate.step);
   const tracked = contenders.map(({ settings, ledger }, index) => ({
     rule: { kind: candidates[index].rule.kind, settings },

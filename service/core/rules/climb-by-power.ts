@@ -7,8 +7,7 @@ import type { Direction, Seen } from "./rule.ts";
  * Source: Femia, Petrone, Spagnuolo & Vitelli, IEEE Trans. Power Electron. 20(4) (2005) 963-973 (from memory).
  */
 export function climbByPower(seen: Seen): Direction {
-  const power = seen.voltage * seen.current;
-  if (power <= 0 && seen.voltage > 0) return -1;
-  const lower = power < seen.earlierVoltage * seen.earlierCurrent;
-  return lower || seen.cut ? (-seen.direction as Direction) : seen.direction;
+  if (seen.power <= 0 && seen.voltage > 0) return -1;
+  const turns = seen.power < seen.earlierPower || seen.cut;
+  return turns ? (-seen.direction as Direction) : seen.direction;
 }

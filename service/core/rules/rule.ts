@@ -100,12 +100,14 @@ export interface TargetRule {
 /** A direction of the terminal voltage: down, stay, up. */
 export type Direction = -1 | 0 | 1;
 
-/** What a climbing rule saw in the last two control periods: terminal voltage V, current A. */
+/** What a climbing rule reads of the last two control periods: V, A, W. NaN before there is anything to see. */
 export interface Seen {
   earlierVoltage: number;
   earlierCurrent: number;
+  earlierPower: number;
   voltage: number;
   current: number;
+  power: number;
   /** The direction of the last step. */
   direction: Direction;
   /** True when the window cut the last step short. */

@@ -7,8 +7,8 @@ import { addCauses, CAUSES } from "./causes.ts";
 /** Width of an irradiance class, W/m2. */
 export const CLASS_WIDTH = 100;
 const CLASSES = 21;
-/** Columns of a month's row: available, clipped, then the causes. */
-export const MONTH_COLUMNS = 2 + CAUSES.length;
+/** Columns of a span's row: available, clipped, then the causes. */
+export const SPAN_COLUMNS = 2 + CAUSES.length;
 /** Columns of a class's row: samples, available, lost. */
 export const CLASS_COLUMNS = 3;
 
@@ -21,12 +21,12 @@ export interface TraceChoice {
 }
 
 /**
- * The sums of one rule over a climate, in W times samples. Months and classes each hold every sample once, so either
+ * The sums of one rule over a climate, in W times samples. Spans (months, say) and classes each hold every sample once, so either
  * adds up to the total.
  */
 export interface Ledger {
-  /** Shape [months, MONTH_COLUMNS]. */
-  readonly months: Float64Array;
+  /** Shape [spans, SPAN_COLUMNS]. */
+  readonly spans: Float64Array;
   /** Shape [21, CLASS_COLUMNS]. */
   readonly classes: Float64Array;
   /** Columns of the rule's operating point; null when not asked for. */
@@ -35,10 +35,10 @@ export interface Ledger {
   readonly causes: Float64Array | null;
 }
 
-/** An empty ledger over `samples` samples in `months` months. */
-export function openLedger(samples: number, months: number, choice: TraceChoice): Ledger {
+/** An empty ledger over `samples` samples in `spans` spans. */
+export function openLedger(samples: number, spans: number, choice: TraceChoice): Ledger {
   return {
-    months: new Float64Array(months * MONTH_COLUMNS),
+    spans: new Float64Array(spans * SPAN_COLUMNS),
     classes: new Float64Array(CLASSES * CLASS_COLUMNS),
     operating: choice.operating ? emptyTrace(samples) : null,
     causes: choice.causes ? new Float64Array(samples * CAUSES.length) : null,
@@ -50,14 +50,14 @@ export function irradianceClass(irradiance: number): number {
   return Math.min(CLASSES - 1, Math.max(0, Math.floor(irradiance / CLASS_WIDTH)));
 }
 
-/** Enters one sample: its month, its irradiance class (row), its cascade of powers and what the limits clipped (W). */
+/** Enters one sample: its span, its irradiance class (row), its cascade of powers and what the limits clipped (W). */
 export function enterSample(ledger: Ledger, at: SamplePlace, cascade: Cascade, clipped: number): void {
-  const { months, classes, causes } = ledger;
-  const month = at.month * MONTH_COLUMNS;
+  const { spans, classes, causes } = ledger;
+  const span = at.span * SPAN_COLUMNS;
   const row = at.irradianceClass * CLASS_COLUMNS;
-  months[month] += cascade.available;
-  months[month + 1] += clipped;
-  addCauses(cascade, months, month + 2);
+  spans[span] += cascade.available;
+  spans[span + 1] += clipped;
+  addCauses(cascade, spans, span + 2);
   classes[row + 1] += cascade.available;
   classes[row + 2] += cascade.available - (1 - cascade.interrupted) * cascade.operating;
   if (causes !== null) addCauses(cascade, causes, at.sample * CAUSES.length);
@@ -66,7 +66,7 @@ export function enterSample(ledger: Ledger, at: SamplePlace, cascade: Cascade, c
 /** Where a sample belongs. */
 export interface SamplePlace {
   sample: number;
-  month: number;
+  span: number;
   irradianceClass: number;
 }
 

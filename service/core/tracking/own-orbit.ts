@@ -74,7 +74,7 @@ function addOrbit(terminals: Terminals, rule: ClimbingRule, from: number, mean: 
     terminals.operate(voltage, point);
     addPoint(turn, point, 1);
     earlier = voltage;
-    voltage = climbOn(rule, terminals, seen, [voltage, point.current]);
+    voltage = climbOn(rule, terminals, seen, voltage, point);
   }
   addPoint(mean, turn, 1 / (STARTS * (MOST_PERIODS - mark.period)));
 }

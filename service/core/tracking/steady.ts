@@ -1,17 +1,17 @@
 import type { PhotovoltaicArray } from "../array/array.ts";
-import { conditionIsc, conditionVoc, emptyCondition, enterCondition } from "../array/condition.ts";
+import { conditionVoc, emptyCondition, enterCondition } from "../array/condition.ts";
 import type { PointTrace } from "../array/maximum-power-trace.ts";
-import { voltageAtCurrent } from "../diode/junction-at-current.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
 import { parabolicPeak } from "../numeric/parabolic-peak.ts";
 import type { ClimbingRule, Sampling, TargetRule, TrackingRule } from "../rules/rule.ts";
 import type { Cascade } from "./causes.ts";
 import type { Converter } from "./converter.ts";
-import { isExact, readingOf, valueReadAs } from "./converter.ts";
+import { isExact } from "./converter.ts";
 import type { Ledger } from "./ledger.ts";
 import { CLASS_COLUMNS, enterOperating, enterSample, irradianceClass } from "./ledger.ts";
 import { addMeanOver } from "./mean-over-voltage.ts";
 import { ownOrbit } from "./own-orbit.ts";
+import { readSample, targetVoltage } from "./target.ts";
 import { Terminals } from "./terminals.ts";
 import { threeLevelOrbit } from "./three-level-orbit.ts";
 
@@ -23,8 +23,8 @@ export interface Weather {
   cellTemperature: Float64Array;
   /** 1 where a sample is left out of every sum; null for none. */
   skipped: Uint8Array | null;
-  /** Index of each sample's month, from 0. */
-  monthOf: Uint16Array;
+  /** Index of the span each sample is summed in, from 0: its month, for a year. */
+  spanOf: Uint16Array;
 }
 
 /** A rule on its converter, and where its sums go. */
@@ -45,17 +45,17 @@ export function trackSteady(
   contenders: readonly Contender[],
   maximum: PointTrace | null,
 ): void {
-  const { irradiance, cellTemperature, skipped, monthOf } = weather;
+  const { irradiance, cellTemperature, skipped, spanOf } = weather;
   const condition = emptyCondition();
   const seats = contenders.map((contender) => ({ ...contender, terminals: new Terminals(contender.converter) }));
   const cascade = emptyCascade();
   const point = { voltage: 0, current: 0, power: 0 };
-  const place = { sample: 0, month: 0, irradianceClass: 0 };
+  const place = { sample: 0, span: 0, irradianceClass: 0 };
 
   for (let i = 0; i < irradiance.length; i++) {
     if (skipped !== null && skipped[i] === 1) continue;
     place.sample = i;
-    place.month = monthOf[i];
+    place.span = spanOf[i];
     place.irradianceClass = irradianceClass(irradiance[i]);
     for (const { ledger } of seats) ledger.classes[place.irradianceClass * CLASS_COLUMNS]++;
     if (!(irradiance[i] > 0)) continue;
@@ -123,9 +123,8 @@ function holdTarget(
   point: OperatingPoint,
 ): void {
   const outside = typeof rule.outside === "number" ? rule.outside : rule.outside[sample];
-  const reading = rule.sampling === null ? 0 : read(rule.sampling, terminals);
-  const wanted = rule.reference(reading, terminals.condition.cellTemperature, outside);
-  const fresh = terminals.clamp(targetVoltage(rule, terminals, wanted));
+  const reading = rule.sampling === null ? 0 : readSample(rule.sampling, terminals);
+  const fresh = targetVoltage(rule, terminals, reading, outside);
   if (rule.step > 0) {
     point.voltage = point.current = point.power = 0;
     addMeanOver(terminals, [fresh - rule.step, fresh + rule.step], 1, point);
@@ -134,48 +133,6 @@ function holdTarget(
   }
   terminals.operate(fresh, point);
   cascade.fresh = cascade.held = terminals.converter.rippleAmplitude > 0 ? terminals.power(fresh) : point.power;
-}
-
-/** The terminal voltage (V) at which the rule's sensor reads what it wants; 0 where the array gives less current. */
-function targetVoltage(rule: TargetRule, terminals: Terminals, wanted: number): number {
-  const { voltageSensor, currentSensor } = terminals.converter;
-  if (rule.regulates === "voltage") return rule.sensed ? valueReadAs(voltageSensor, wanted) : wanted;
-  const current = rule.sensed ? valueReadAs(currentSensor, wanted) : wanted;
-  if (current >= conditionIsc(terminals.condition)) return 0;
-  return Math.max(0, voltageAtCurrent(terminals.condition.circuit, current));
-}
-
-/** What a sample reads in this condition, through the sensor: V or A. */
-function read(sampling: Sampling, terminals: Terminals): number {
-  const { voltageSensor, currentSensor } = terminals.converter;
-  switch (sampling.reads) {
-    case "open-circuit-voltage":
-      return readingOf(voltageSensor, conditionVoc(terminals.condition));
-    case "short-circuit-current":
-      return readingOf(currentSensor, conditionIsc(terminals.condition));
-    case "best-swept-voltage":
-      return bestSwept(sampling.points, terminals);
-  }
-}
-
-/** The voltage (V) of the highest power read at `points` voltages equally spaced over window and [0, Voc]. */
-function bestSwept(points: number, terminals: Terminals): number {
-  const { voltageSensor, currentSensor, trackingMinimumVoltage, trackingMaximumVoltage } = terminals.converter;
-  const low = Math.max(0, trackingMinimumVoltage);
-  const high = Math.max(low, Math.min(trackingMaximumVoltage, conditionVoc(terminals.condition)));
-  const point = { voltage: 0, current: 0, power: 0 };
-  let best = low;
-  let bestPower = Number.NEGATIVE_INFINITY;
-  for (let k = 0; k < points; k++) {
-    const voltage = low + ((high - low) * k) / (points - 1);
-    terminals.operate(voltage, point);
-    const power = readingOf(voltageSensor, voltage) * readingOf(currentSensor, point.current);
-    if (power > bestPower) {
-      best = voltage;
-      bestPower = power;
-    }
-  }
-  return best;
 }
 
 function climb(rule: ClimbingRule, terminals: Terminals, cascade: Cascade, point: OperatingPoint): void {

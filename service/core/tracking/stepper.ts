@@ -1,0 +1,290 @@
+import type { PhotovoltaicArray } from "../array/array.ts";
+import type { Condition } from "../array/condition.ts";
+import { conditionVoc, emptyCondition } from "../array/condition.ts";
+import type { OperatingPoint } from "../diode/maximum-power.ts";
+import { maximumPower } from "../diode/maximum-power.ts";
+import type { Seen } from "../rules/rule.ts";
+import { climbOn, firstSight } from "./climber.ts";
+import type { Converter } from "./converter.ts";
+import { SampleClock } from "./sample-clock.ts";
+import type { Contender } from "./steady.ts";
+import type { Piece, Stretch } from "./stretch.ts";
+import { enterPiece, temperatureAt } from "./stretch.ts";
+import type { Tally } from "./tally.ts";
+import { emptyTally, tallyPoint } from "./tally.ts";
+import { readSample, targetVoltage } from "./target.ts";
+import { Terminals } from "./terminals.ts";
+import type { Place, Run, TimedWeather } from "./weather-path.ts";
+import { locate, valueAt } from "./weather-path.ts";
+
+/** Values a stepper wants as cubics: see `Followed`. */
+export const FOLLOWED = { available: 0, clipped: 1, best: 2, fresh: 3, power: 4, voltage: 5, current: 6 } as const;
+export const FOLLOWED_COUNT = 7;
+
+/** Periods [first, end) of one piece; `weight` of the last one of all, in periods. */
+export interface Periods {
+  first: number;
+  end: number;
+}
+
+/**
+ * One rule on its own clock. Each period is evaluated once, at its middle: that power counts for the whole period and
+ * is what the rule sees next. State is a handful of numbers; nothing grows with the periods.
+ */
+export class Stepper {
+  readonly contender: Contender;
+  readonly period: number;
+  readonly tally: Tally = emptyTally();
+  /** Whether the operating point follows the weather smoothly, so that no period need be stepped one by one. */
+  readonly smooth: boolean;
+  readonly tolerances: readonly number[];
+  private readonly array: PhotovoltaicArray;
+  private readonly weather: TimedWeather;
+  private readonly terminals: Terminals;
+  private readonly condition: Condition = emptyCondition();
+  /** The whole of the weather's last period may be cut: index and weight of it. */
+  private readonly lastPeriod: number;
+  private readonly lastWeight: number;
+  private readonly limited: boolean;
+  private readonly point: OperatingPoint = { voltage: 0, current: 0, power: 0 };
+  private readonly place: Place = { left: 0, right: 0, share: 0 };
+  private readonly clock: SampleClock | null;
+  private seen: Seen = firstSight();
+  private asleep = true;
+  private reading = 0;
+  private voltage = 0;
+
+  constructor(contender: Contender, array: PhotovoltaicArray, weather: TimedWeather) {
+    const { rule, converter } = contender;
+    this.contender = contender;
+    this.array = array;
+    this.weather = weather;
+    this.terminals = new Terminals(converter);
+    this.period = rule.behaviour === "perfect" ? Math.min(1, weather.step) : rule.controlPeriod;
+    const duration = weather.step * weather.irradiance.length;
+    const periods = Math.ceil(duration / this.period - 1e-9);
+    this.lastPeriod = periods - 1;
+    this.lastWeight = Math.min(1, duration / this.period - this.lastPeriod);
+    this.limited = Number.isFinite(converter.maximumPower) || Number.isFinite(converter.maximumCurrent);
+    this.smooth = isSmooth(contender);
+    const sampling = rule.behaviour === "perfect" ? null : rule.sampling;
+    this.clock = sampling === null ? null : new SampleClock(sampling, converter, array, weather);
+    this.tolerances = [1e-8, 1e-8, 1e-8, followsFresh(contender) ? 1e-8 : 0, this.smooth ? 1e-8 : 0, 0, 0];
+  }
+
+  /** Periods whose middle lies in [from, to), s; the last piece of all takes the last period whole. */
+  periodsIn(from: number, to: number, isEnd: boolean): Periods {
+    const end = isEnd ? this.lastPeriod + 1 : periodFrom(to, this.period);
+    return { first: periodFrom(from, this.period), end };
+  }
+
+  /** Writes what the stepper follows of a condition (see `FOLLOWED`). */
+  follow(condition: Condition, time: number, run: Run, values: Float64Array, offset: number): void {
+    const { rule } = this.contender;
+    const { terminals, point } = this;
+    terminals.enter(condition);
+    values[offset] = terminals.available;
+    values[offset + 1] = terminals.clipped;
+    values[offset + 2] = terminals.best;
+    if (rule.behaviour === "climb") {
+      values.fill(0, offset + 3, offset + FOLLOWED_COUNT);
+      return;
+    }
+    if (rule.behaviour === "perfect") {
+      terminals.operateWithoutRipple(terminals.bestVoltage, point);
+    } else {
+      const reading = rule.sampling === null ? 0 : readSample(rule.sampling, terminals);
+      const fresh = targetVoltage(rule, terminals, reading, this.outsideAt(time, run));
+      values[offset + 3] = terminals.power(fresh);
+      if (this.smooth) terminals.operate(fresh, point);
+    }
+    if (rule.behaviour === "perfect") values[offset + 3] = terminals.best;
+    values[offset + 4] = point.power;
+    values[offset + 5] = point.voltage;
+    values[offset + 6] = point.current;
+  }
+
+  private outsideAt(time: number, run: Run): number {
+    const { rule } = this.contender;
+    if (rule.behaviour !== "target") return 0;
+    if (typeof rule.outside === "number") return rule.outside;
+    locate(this.weather, run, time, this.place);
+    return valueAt(rule.outside, this.place);
+  }
+
+  /** Forgets everything: darkness or a gap. */
+  sleep(): void {
+    this.asleep = true;
+  }
+
+  /** Steps the periods of a stretch whose cubics hold. `base` is the index of the stepper's first followed quantity. */
+  stepAlong(stretch: Stretch, piece: Piece, run: Run, periods: Periods, base: number): void {
+    const count = periods.end - periods.first;
+    if (count <= 0) return;
+    this.sumSmooth(stretch, periods, base);
+    if (this.smooth) return;
+    const { circuit } = this.condition;
+    for (let k = periods.first; k < periods.end; k++) {
+      const time = (k + 0.5) * this.period;
+      stretch.circuitAt(time, circuit);
+      this.condition.cellTemperature = temperatureAt(piece, time);
+      this.condition.openCircuitVoltage = Number.NaN;
+      this.condition.shortCircuitCurrent = Number.NaN;
+      if (this.limited) {
+        maximumPower(circuit, this.condition.maximum);
+        this.terminals.enter(this.condition);
+      } else {
+        this.terminals.condition = this.condition;
+      }
+      const wakePower = this.contender.converter.wakePower;
+      const idle = wakePower > 0 && stretch.followedAt(base + FOLLOWED.available, time) < wakePower;
+      this.stepPeriod(k, run, idle);
+    }
+  }
+
+  /** What is smooth along a stretch, summed over its periods without stepping them. */
+  private sumSmooth(stretch: Stretch, periods: Periods, base: number): void {
+    const { tally, period } = this;
+    const count = periods.end - periods.first;
+    const times = { first: (periods.first + 0.5) * period, spacing: period, count };
+    const cut = periods.end === this.lastPeriod + 1 ? 1 - this.lastWeight : 0;
+    const sum = (index: number): number => {
+      const whole = stretch.sumFollowed(base + index, times);
+      return cut > 0 ? whole - cut * stretch.followedAt(base + index, (this.lastPeriod + 0.5) * period) : whole;
+    };
+    for (const q of [0, 1, 2] as const) tally.maximum[q] += stretch.sumMaximum(q, times);
+    tally.sunlit += count;
+    tally.available += sum(FOLLOWED.available);
+    tally.clipped += sum(FOLLOWED.clipped);
+    const best = sum(FOLLOWED.best);
+    tally.best += best;
+    const { rule } = this.contender;
+    const fresh = rule.behaviour === "climb" ? best : sum(FOLLOWED.fresh);
+    tally.fresh += fresh;
+    if (rule.behaviour === "climb") tally.held += best;
+    if (!this.smooth) return;
+    tally.held += fresh;
+    tally.operating += sum(FOLLOWED.power);
+    tally.voltage += sum(FOLLOWED.voltage);
+    tally.current += sum(FOLLOWED.current);
+    tally.lit += count - cut;
+  }
+
+  /** Steps the periods of a piece too short or too crooked for cubics: everything solved period by period. */
+  stepExactly(piece: Piece, run: Run, periods: Periods): void {
+    const { tally, condition, terminals } = this;
+    const { rule, converter } = this.contender;
+    const values = new Float64Array(FOLLOWED_COUNT);
+    for (let k = periods.first; k < periods.end; k++) {
+      const time = (k + 0.5) * this.period;
+      enterPiece(condition, this.array, piece, time);
+      if (condition.maximum.power <= 0) {
+        this.sleep();
+        continue;
+      }
+      this.follow(condition, time, run, values, 0);
+      const weight = this.weightOf(k);
+      tally.maximum[0] += condition.maximum.voltage;
+      tally.maximum[1] += condition.maximum.current;
+      tally.maximum[2] += condition.maximum.power;
+      tally.sunlit += 1;
+      tally.available += weight * values[FOLLOWED.available];
+      tally.clipped += weight * values[FOLLOWED.clipped];
+      tally.best += weight * values[FOLLOWED.best];
+      tally.fresh += weight * (rule.behaviour === "climb" ? values[FOLLOWED.best] : values[FOLLOWED.fresh]);
+      if (rule.behaviour === "climb") tally.held += weight * values[FOLLOWED.best];
+      if (this.smooth) {
+        tally.held += weight * values[FOLLOWED.fresh];
+        tallyPoint(tally, this.point, weight, 0);
+      } else {
+        this.stepPeriod(k, run, terminals.available < converter.wakePower);
+      }
+    }
+  }
+
+  private weightOf(period: number): number {
+    return period === this.lastPeriod ? this.lastWeight : 1;
+  }
+
+  /** One period in the condition the terminals have entered. */
+  private stepPeriod(k: number, run: Run, idle: boolean): void {
+    const { rule } = this.contender;
+    const { terminals, point, tally } = this;
+    if (rule.behaviour === "perfect") return;
+    const weight = this.weightOf(k);
+    if (this.asleep) this.wake(k);
+    if (this.clock !== null) this.sample(this.clock, k, run);
+    if (rule.behaviour === "climb") {
+      terminals.operate(this.voltage, point);
+      this.settle(k, idle, weight);
+      this.voltage = climbOn(rule, terminals, this.seen, this.voltage, point);
+      return;
+    }
+    const target = targetVoltage(rule, terminals, this.reading, this.outsideAt((k + 0.5) * this.period, run));
+    if (rule.step === 0) this.voltage = target;
+    terminals.operate(this.voltage, point);
+    const plain = rule.step === 0 && this.contender.converter.rippleAmplitude === 0;
+    tally.held += weight * (plain ? point.power : terminals.power(target));
+    this.settle(k, idle, weight);
+    if (rule.step > 0) {
+      this.voltage = terminals.clamp(this.voltage + (this.voltage < target ? rule.step : -rule.step));
+    }
+  }
+
+  private settle(k: number, idle: boolean, weight: number): void {
+    tallyPoint(this.tally, this.point, weight, idle ? 1 : this.interruptedShare(k, weight));
+  }
+
+  private wake(k: number): void {
+    this.asleep = false;
+    this.clock?.wake(k * this.period);
+    this.seen = firstSight();
+    this.voltage = this.terminals.clamp(conditionVoc(this.condition));
+  }
+
+  /** Takes the latest sample due at the middle of period `k`; a pilot cell is read anew. */
+  private sample(clock: SampleClock, k: number, run: Run): void {
+    if (clock.sampling.pilot) {
+      this.reading = readSample(clock.sampling, this.terminals);
+      return;
+    }
+    if (!clock.isDue((k + 0.5) * this.period)) return;
+    this.reading = clock.read(run);
+    if (this.contender.rule.behaviour !== "climb") return;
+    this.voltage = this.terminals.clamp(this.reading);
+    this.seen = firstSight();
+  }
+
+  /** Share of period `k` that samples take, of the part of it that counts. */
+  private interruptedShare(k: number, weight: number): number {
+    if (this.clock === null || this.clock.sampling.pilot) return 0;
+    return this.clock.interruptedShare(k * this.period, (k + weight) * this.period);
+  }
+}
+
+/** Whether the operating point follows the weather smoothly: no steps, no held samples, no sleep, no rounded reading. */
+function isSmooth({ rule, converter }: Contender): boolean {
+  if (rule.behaviour === "perfect") return true;
+  if (rule.behaviour === "climb" || rule.step > 0 || converter.wakePower > 0) return false;
+  if (rule.sampling === null) return true;
+  return rule.sampling.pilot && isUnrounded(converter);
+}
+
+/**
+ * Whether the power at the fresh target is smooth enough to be checked. Where readings are rounded or come from a sweep
+ * it moves in small stairs: the cubics then run through their middle, which touches only how the loss splits between
+ * set point and held sample, by less than one stair.
+ */
+function followsFresh({ rule, converter }: Contender): boolean {
+  if (rule.behaviour !== "target") return false;
+  return rule.sampling === null || (rule.sampling.reads !== "best-swept-voltage" && isUnrounded(converter));
+}
+
+function isUnrounded({ voltageSensor, currentSensor }: Converter): boolean {
+  return voltageSensor.resolution === 0 && currentSensor.resolution === 0;
+}
+
+/** The first period whose middle is at or after `time`, s. */
+function periodFrom(time: number, period: number): number {
+  return Math.ceil(time / period - 0.5 - 1e-9);
+}

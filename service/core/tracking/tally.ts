@@ -1,0 +1,57 @@
+import type { OperatingPoint } from "../diode/maximum-power.ts";
+
+/** Sums over the control periods of one sample, in W (V, A) times periods. */
+export interface Tally {
+  available: number;
+  clipped: number;
+  best: number;
+  fresh: number;
+  held: number;
+  operating: number;
+  /** Operating power times its interrupted share. */
+  interrupted: number;
+  voltage: number;
+  /** Delivered current, interruptions counted. */
+  current: number;
+  /** Periods awake. */
+  lit: number;
+  /** Voltage, current and power of the array's maximum. */
+  readonly maximum: [number, number, number];
+  /** Periods in the light. */
+  sunlit: number;
+}
+
+/** Nothing yet. */
+export function emptyTally(): Tally {
+  return {
+    available: 0,
+    clipped: 0,
+    best: 0,
+    fresh: 0,
+    held: 0,
+    operating: 0,
+    interrupted: 0,
+    voltage: 0,
+    current: 0,
+    lit: 0,
+    maximum: [0, 0, 0],
+    sunlit: 0,
+  };
+}
+
+/** Back to nothing. */
+export function clearTally(tally: Tally): void {
+  tally.available = tally.clipped = tally.best = tally.fresh = tally.held = 0;
+  tally.operating = tally.interrupted = tally.voltage = tally.current = tally.lit = 0;
+  tally.maximum.fill(0);
+  tally.sunlit = 0;
+}
+
+/** Adds the operating point of a period (or `weight` of it), of which a share `interrupted` delivers nothing. */
+export function tallyPoint(tally: Tally, point: OperatingPoint, weight: number, interrupted: number): void {
+  tally.operating += weight * point.power;
+  tally.interrupted += weight * interrupted * point.power;
+  tally.voltage += weight * point.voltage;
+  tally.current += weight * (1 - interrupted) * point.current;
+  tally.lit += weight;
+}
