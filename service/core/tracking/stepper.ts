@@ -1,6 +1,7 @@
 import type { PhotovoltaicArray } from "../array/array.ts";
 import type { Condition } from "../array/condition.ts";
 import { conditionVoc, emptyCondition } from "../array/condition.ts";
+import { FollowingCurrent } from "../diode/following-current.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
 import { maximumPower } from "../diode/maximum-power.ts";
 import type { Seen } from "../rules/rule.ts";
@@ -46,6 +47,9 @@ export class Stepper {
   private readonly lastPeriod: number;
   private readonly lastWeight: number;
   private readonly limited: boolean;
+  /** Neither limits nor ripple: the array's own current at the held voltage. */
+  private readonly plain: boolean;
+  private readonly following = new FollowingCurrent();
   private readonly point: OperatingPoint = { voltage: 0, current: 0, power: 0 };
   private readonly place: Place = { left: 0, right: 0, share: 0 };
   private readonly clock: SampleClock | null;
@@ -66,6 +70,7 @@ export class Stepper {
     this.lastPeriod = periods - 1;
     this.lastWeight = Math.min(1, duration / this.period - this.lastPeriod);
     this.limited = Number.isFinite(converter.maximumPower) || Number.isFinite(converter.maximumCurrent);
+    this.plain = !this.limited && converter.rippleAmplitude === 0;
     this.smooth = isSmooth(contender);
     const sampling = rule.behaviour === "perfect" ? null : rule.sampling;
     this.clock = sampling === null ? null : new SampleClock(sampling, converter, array, weather);
@@ -215,20 +220,32 @@ export class Stepper {
     if (this.asleep) this.wake(k);
     if (this.clock !== null) this.sample(this.clock, k, run);
     if (rule.behaviour === "climb") {
-      terminals.operate(this.voltage, point);
+      this.operate();
       this.settle(k, idle, weight);
       this.voltage = climbOn(rule, terminals, this.seen, this.voltage, point);
       return;
     }
     const target = targetVoltage(rule, terminals, this.reading, this.outsideAt((k + 0.5) * this.period, run));
     if (rule.step === 0) this.voltage = target;
-    terminals.operate(this.voltage, point);
+    this.operate();
     const plain = rule.step === 0 && this.contender.converter.rippleAmplitude === 0;
     tally.held += weight * (plain ? point.power : terminals.power(target));
     this.settle(k, idle, weight);
     if (rule.step > 0) {
       this.voltage = terminals.clamp(this.voltage + (this.voltage < target ? rule.step : -rule.step));
     }
+  }
+
+  /** Writes the operating point at the held voltage. */
+  private operate(): void {
+    const { point, voltage } = this;
+    if (!this.plain) {
+      this.terminals.operate(voltage, point);
+      return;
+    }
+    point.voltage = voltage;
+    point.current = Math.max(0, this.following.at(this.condition.circuit, voltage));
+    point.power = voltage * point.current;
   }
 
   private settle(k: number, idle: boolean, weight: number): void {
