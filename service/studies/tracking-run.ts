@@ -11,6 +11,7 @@ import type { Settings } from "../core/rules/rule.ts";
 import type { Ledger, TraceChoice } from "../core/tracking/ledger.ts";
 import { openLedger } from "../core/tracking/ledger.ts";
 import { trackSteady } from "../core/tracking/steady.ts";
+import { trackStepped } from "../core/tracking/stepped.ts";
 import type { ConverterChoice } from "./converter-choice.ts";
 import { buildConverter } from "./converter-choice.ts";
 import type { EnergySummary } from "./energy.ts";
@@ -20,8 +21,11 @@ import { buildModule } from "./module-choice.ts";
 import { checkRule } from "./rule-relations.ts";
 import { StudyError } from "./study-error.ts";
 
-/** How the rules are computed: sample by sample at rest, or as the study finds fit. */
-export type Mode = "auto" | "steady";
+/** How the rules are computed: sample by sample at rest, at their own control period, or as the step suggests. */
+export type Mode = "auto" | "steady" | "stepped";
+
+/** `auto` takes samples further apart than this, s, at rest: within them clouds come and go unseen anyway. */
+const LONGEST_STEPPED = 300;
 
 /** What every study over a climate asks of one array. */
 export interface TrackingRequest {
@@ -58,7 +62,7 @@ export interface TrackingRun {
   array: PhotovoltaicArray;
   climate: PreparedClimate;
   coverage: Coverage;
-  mode: "steady";
+  mode: "steady" | "stepped";
   modeReason: string;
   maximum: PointTrace | null;
   tracked: Tracked[];
@@ -97,7 +101,10 @@ export function runTracking(request: TrackingRequest, candidates: Candidate[], t
     };
   });
   const maximum = traces.maximum ? emptyTrace(samples) : null;
-  trackSteady(array, { ...climate, spanOf: monthOf }, contenders, maximum);
+  const { mode, modeReason } = resolveMode(request.mode, request.climate.step);
+  const weather = { ...climate, spanOf: monthOf, step: request.climate.step, timing: request.climate.timing };
+  if (mode === "steady") trackSteady(array, weather, contenders, maximum);
+  else trackStepped(array, weather, contenders, maximum);
   const insolation = insolationOf(climate, request.climate.step);
   const tracked = contenders.map(({ settings, ledger }, index) => ({
     rule: { kind: candidates[index].rule.kind, settings },
@@ -105,11 +112,15 @@ export function runTracking(request: TrackingRequest, candidates: Candidate[], t
     ledger,
     ...summarize(ledger, months, request.climate.step, insolation),
   }));
-  return { built, array, climate, coverage, mode: "steady", modeReason: reasonOf(request.mode), maximum, tracked };
+  return { built, array, climate, coverage, mode, modeReason, maximum, tracked };
 }
 
-function reasonOf(mode: Mode): string {
-  return mode === "steady" ? "asked for" : "each sample is taken at rest";
+/** The mode a study runs in, and why. `step` in s. */
+export function resolveMode(mode: Mode, step: number): { mode: "steady" | "stepped"; modeReason: string } {
+  if (mode !== "auto") return { mode, modeReason: "asked for" };
+  return step > LONGEST_STEPPED
+    ? { mode: "steady", modeReason: `a step of ${step} s is longer than ${LONGEST_STEPPED} s` }
+    : { mode: "stepped", modeReason: `a step of ${step} s is not longer than ${LONGEST_STEPPED} s` };
 }
 
 function coverageOf(series: ClimateSeries, climate: PreparedClimate): Coverage {
