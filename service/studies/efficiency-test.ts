@@ -1,13 +1,15 @@
 import type { PhotovoltaicArray } from "../core/array/array.ts";
 import { photovoltaicArray } from "../core/array/array.ts";
 import { emptyCondition, enterCondition } from "../core/array/condition.ts";
+import type { PointTrace } from "../core/array/maximum-power-trace.ts";
+import { emptyTrace } from "../core/array/maximum-power-trace.ts";
 import { bracketedRoot } from "../core/numeric/bracketed-root.ts";
 import type { RuleChoice } from "../core/rules/index.ts";
 import { completeSettings, prepareRule } from "../core/rules/index.ts";
 import type { Settings, TrackingRule } from "../core/rules/rule.ts";
 import { CAUSES } from "../core/tracking/causes.ts";
 import type { Converter } from "../core/tracking/converter.ts";
-import type { Ledger } from "../core/tracking/ledger.ts";
+import type { Extremes, Ledger } from "../core/tracking/ledger.ts";
 import { openLedger, SPAN_COLUMNS } from "../core/tracking/ledger.ts";
 import { trackSteady } from "../core/tracking/steady.ts";
 import { trackStepped } from "../core/tracking/stepped.ts";
@@ -35,6 +37,19 @@ export interface EfficiencyTestRequest {
   test: SequenceName | "static";
   /** degC, constant. */
   cellTemperature: number;
+  /** Slope (W/m2/s) of the row whose course is wanted; null for none. */
+  traceSlope: number | null;
+}
+
+/** The course of one row, second by second: means over each span, and the extremes of its control periods. */
+export interface RowTrace extends Extremes {
+  slope: number;
+  /** s. */
+  step: number;
+  /** W/m2 at the start of each span, shape [n]; straight between. */
+  irradiance: Float64Array;
+  maximum: PointTrace;
+  operating: PointTrace;
 }
 
 /** One row of a dynamic test: a slope, repeated. */
@@ -64,7 +79,7 @@ export interface EfficiencyTestResult {
   built: BuiltModule;
   rule: { kind: RuleChoice["kind"]; settings: Settings };
   /** Null for the static test. */
-  dynamic: { rows: EfficiencyRow[]; efficiency: number; duration: number } | null;
+  dynamic: { rows: EfficiencyRow[]; efficiency: number; duration: number; trace: RowTrace | null } | null;
   /** Null for a dynamic test. */
   static: { levels: EfficiencyLevel[]; europeanWeighted: number; cecWeighted: number } | null;
 }
@@ -86,8 +101,11 @@ export function testEfficiency(request: EfficiencyTestRequest): EfficiencyTestRe
     cellTemperature: request.cellTemperature,
   };
   const rule = { kind: request.rule.kind, settings };
+  if (request.test === "static" && request.traceSlope !== null) {
+    throw new StudyError("unknown-slope", "/traceSlope", "The static test has no slopes: leave traceSlope out.");
+  }
   if (request.test === "static") return { built, rule, dynamic: null, static: staticTest(bench) };
-  return { built, rule, dynamic: dynamicTest(bench, request.test), static: null };
+  return { built, rule, dynamic: dynamicTest(bench, request.test, request.traceSlope), static: null };
 }
 
 /** What is under test. */
@@ -98,11 +116,19 @@ interface Bench {
   cellTemperature: number;
 }
 
-function dynamicTest(bench: Bench, test: SequenceName) {
-  const rows = SEQUENCES[test].rows.map(({ slope, repetitions }): EfficiencyRow => {
-    const { irradiance, step, settling, duration } = rampSequence(test, slope, repetitions);
+/** Longest span of a traced row, s. */
+const TRACE_STEP = 1;
+
+function dynamicTest(bench: Bench, test: SequenceName, traceSlope: number | null) {
+  const rows: EfficiencyRow[] = [];
+  let trace: RowTrace | null = null;
+  for (const row of SEQUENCES[test].rows) {
+    const traced = row.slope === traceSlope;
+    const series = rampSequence(test, row, traced ? TRACE_STEP : Number.POSITIVE_INFINITY);
+    const { irradiance, step, settling } = series;
     // Span 0 is the settling, which does not count; span 1 the ramps.
-    const ledger = openLedger(irradiance.length, 2, { operating: false, causes: false });
+    const ledger = openLedger(irradiance.length, 2, { operating: traced, causes: false, extremes: traced });
+    const maximum = traced ? emptyTrace(irradiance.length) : null;
     const weather = {
       irradiance,
       cellTemperature: new Float64Array(irradiance.length).fill(bench.cellTemperature),
@@ -111,11 +137,24 @@ function dynamicTest(bench: Bench, test: SequenceName) {
       step,
       timing: "instant" as const,
     };
-    trackStepped(bench.array, weather, [{ rule: bench.rule, converter: bench.converter, ledger }], null);
-    return { slope, repetitions, duration, ...sharesOf(ledger, 1) };
-  });
+    trackStepped(bench.array, weather, [{ rule: bench.rule, converter: bench.converter, ledger }], maximum);
+    rows.push({ ...row, duration: series.duration, ...sharesOf(ledger, 1) });
+    if (maximum === null) continue;
+    trace = { slope: row.slope, step, irradiance, maximum, operating: ledger.operating!, ...ledger.extremes! };
+  }
+  if (traceSlope !== null && trace === null) throw noSuchSlope(test);
   const efficiency = rows.reduce((sum, row) => sum + row.efficiency, 0) / rows.length;
-  return { rows, efficiency, duration: rows.reduce((sum, row) => sum + row.duration, 0) };
+  return { rows, efficiency, duration: rows.reduce((sum, row) => sum + row.duration, 0), trace };
+}
+
+function noSuchSlope(test: SequenceName): StudyError {
+  const slopes = SEQUENCES[test].rows.map(({ slope }) => slope).join(", ");
+  return new StudyError(
+    "unknown-slope",
+    "/traceSlope",
+    `${test} has no such row; its slopes are ${slopes} W/m2/s.`,
+    slopes,
+  );
 }
 
 /** Efficiency and lost shares of one span; a span without available energy counts as efficiency 1, nothing lost. */

@@ -1,5 +1,5 @@
 /** One row of a sequence: a slope (W/m2/s) and how often it is repeated. */
-interface SequenceRow {
+export interface SequenceRow {
   slope: number;
   repetitions: number;
 }
@@ -34,6 +34,9 @@ export type SequenceName = keyof typeof SEQUENCES;
 /** Settling at the low level before the ramps, s. */
 export const SETTLING = 300;
 
+/** Most samples of one dwell: every row closes with far fewer. */
+const MOST_PARTS = 4096;
+
 /** A row as an instant series: straight between its samples, constant after the last. */
 export interface RampSeries {
   /** W/m2, shape [n]. */
@@ -47,14 +50,14 @@ export interface RampSeries {
 }
 
 /**
- * One row of a sequence: settling, then ramp up, dwell, ramp down, dwell, repeated. The step is the longest that
- * divides dwell and ramp both, so that every corner is a sample.
+ * One row of a sequence: settling, then ramp up, dwell, ramp down, dwell, repeated. The step is the longest up to
+ * `longest` (s) that divides dwell and ramp both, so that every corner is a sample.
  */
-export function rampSequence(test: SequenceName, slope: number, repetitions: number): RampSeries {
+export function rampSequence(test: SequenceName, { slope, repetitions }: SequenceRow, longest: number): RampSeries {
   const { low, high, dwell } = SEQUENCES[test];
   const ramp = (high - low) / slope;
-  let parts = 1;
-  while (parts < 64 && Math.abs((ramp * parts) / dwell - Math.round((ramp * parts) / dwell)) > 1e-9) parts++;
+  let parts = Math.max(1, Math.ceil(dwell / longest));
+  while (parts < MOST_PARTS && Math.abs((ramp * parts) / dwell - Math.round((ramp * parts) / dwell)) > 1e-9) parts++;
   const step = dwell / parts;
   const rampSamples = Math.round(ramp / step);
   const settling = Math.round(SETTLING / step);

@@ -18,6 +18,16 @@ export interface TraceChoice {
   operating: boolean;
   /** Lost energy by cause. */
   causes: boolean;
+  /** Least and most of the operating voltage and power within each sample; stepped tracking only. */
+  extremes?: boolean;
+}
+
+/** Least and most within each sample, V and W, each of shape [n]; 0 in the dark. */
+export interface Extremes {
+  leastVoltage: Float64Array;
+  mostVoltage: Float64Array;
+  leastPower: Float64Array;
+  mostPower: Float64Array;
 }
 
 /**
@@ -33,6 +43,8 @@ export interface Ledger {
   readonly operating: PointTrace | null;
   /** Lost W by cause, shape [samples, 6]; null when not asked for. */
   readonly causes: Float64Array | null;
+  /** Null when not asked for. */
+  readonly extremes: Extremes | null;
 }
 
 /** An empty ledger over `samples` samples in `spans` spans. */
@@ -42,6 +54,16 @@ export function openLedger(samples: number, spans: number, choice: TraceChoice):
     classes: new Float64Array(CLASSES * CLASS_COLUMNS),
     operating: choice.operating ? emptyTrace(samples) : null,
     causes: choice.causes ? new Float64Array(samples * CAUSES.length) : null,
+    extremes: choice.extremes === true ? emptyExtremes(samples) : null,
+  };
+}
+
+function emptyExtremes(samples: number): Extremes {
+  return {
+    leastVoltage: new Float64Array(samples),
+    mostVoltage: new Float64Array(samples),
+    leastPower: new Float64Array(samples),
+    mostPower: new Float64Array(samples),
   };
 }
 

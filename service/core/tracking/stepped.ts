@@ -165,6 +165,13 @@ class Walk {
         power: (tally.operating - tally.interrupted) * share,
       });
     }
+    const { extremes } = contender.ledger;
+    if (extremes !== null && tally.lit > 0) {
+      extremes.leastVoltage[place.sample] = tally.leastVoltage;
+      extremes.mostVoltage[place.sample] = tally.mostVoltage;
+      extremes.leastPower[place.sample] = tally.leastPower;
+      extremes.mostPower[place.sample] = tally.mostPower;
+    }
     clearTally(tally);
   }
 }

@@ -12,7 +12,7 @@ import type { Contender } from "./steady.ts";
 import type { Piece, Stretch } from "./stretch.ts";
 import { enterPiece, temperatureAt } from "./stretch.ts";
 import type { Tally } from "./tally.ts";
-import { emptyTally, tallyPoint } from "./tally.ts";
+import { emptyTally, stretchExtremes, tallyPoint } from "./tally.ts";
 import { readSample, targetVoltage } from "./target.ts";
 import { Terminals } from "./terminals.ts";
 import type { Place, Run, TimedWeather } from "./weather-path.ts";
@@ -35,7 +35,7 @@ export interface Periods {
 export class Stepper {
   readonly contender: Contender;
   readonly period: number;
-  readonly tally: Tally = emptyTally();
+  readonly tally: Tally;
   /** Whether the operating point follows the weather smoothly, so that no period need be stepped one by one. */
   readonly smooth: boolean;
   readonly tolerances: readonly number[];
@@ -61,6 +61,7 @@ export class Stepper {
   constructor(contender: Contender, array: PhotovoltaicArray, weather: TimedWeather) {
     const { rule, converter } = contender;
     this.contender = contender;
+    this.tally = emptyTally(contender.ledger.extremes !== null);
     this.array = array;
     this.weather = weather;
     this.terminals = new Terminals(converter);
@@ -173,6 +174,12 @@ export class Stepper {
     tally.voltage += sum(FOLLOWED.voltage);
     tally.current += sum(FOLLOWED.current);
     tally.lit += count - cut;
+    if (!tally.keepsExtremes) return;
+    for (let k = periods.first; k < periods.end; k++) {
+      const time = (k + 0.5) * period;
+      const voltage = stretch.followedAt(base + FOLLOWED.voltage, time);
+      stretchExtremes(tally, voltage, stretch.followedAt(base + FOLLOWED.power, time));
+    }
   }
 
   /** Steps the periods of a piece too short or too crooked for cubics: everything solved period by period. */

@@ -19,10 +19,16 @@ export interface Tally {
   readonly maximum: [number, number, number];
   /** Periods in the light. */
   sunlit: number;
+  /** Least and most voltage and delivered power of a period; kept only when `keepsExtremes`. */
+  readonly keepsExtremes: boolean;
+  leastVoltage: number;
+  mostVoltage: number;
+  leastPower: number;
+  mostPower: number;
 }
 
 /** Nothing yet. */
-export function emptyTally(): Tally {
+export function emptyTally(keepsExtremes: boolean): Tally {
   return {
     available: 0,
     clipped: 0,
@@ -36,6 +42,11 @@ export function emptyTally(): Tally {
     lit: 0,
     maximum: [0, 0, 0],
     sunlit: 0,
+    keepsExtremes,
+    leastVoltage: Number.POSITIVE_INFINITY,
+    mostVoltage: Number.NEGATIVE_INFINITY,
+    leastPower: Number.POSITIVE_INFINITY,
+    mostPower: Number.NEGATIVE_INFINITY,
   };
 }
 
@@ -45,6 +56,8 @@ export function clearTally(tally: Tally): void {
   tally.operating = tally.interrupted = tally.voltage = tally.current = tally.lit = 0;
   tally.maximum.fill(0);
   tally.sunlit = 0;
+  tally.leastVoltage = tally.leastPower = Number.POSITIVE_INFINITY;
+  tally.mostVoltage = tally.mostPower = Number.NEGATIVE_INFINITY;
 }
 
 /** Adds the operating point of a period (or `weight` of it), of which a share `interrupted` delivers nothing. */
@@ -54,4 +67,13 @@ export function tallyPoint(tally: Tally, point: OperatingPoint, weight: number, 
   tally.voltage += weight * point.voltage;
   tally.current += weight * (1 - interrupted) * point.current;
   tally.lit += weight;
+  if (tally.keepsExtremes) stretchExtremes(tally, point.voltage, (1 - interrupted) * point.power);
+}
+
+/** Widens the extremes to a period's voltage (V) and delivered power (W). */
+export function stretchExtremes(tally: Tally, voltage: number, power: number): void {
+  tally.leastVoltage = Math.min(tally.leastVoltage, voltage);
+  tally.mostVoltage = Math.max(tally.mostVoltage, voltage);
+  tally.leastPower = Math.min(tally.leastPower, power);
+  tally.mostPower = Math.max(tally.mostPower, power);
 }

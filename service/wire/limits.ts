@@ -1,0 +1,22 @@
+/** The most the service ever does for one request. They stand in the document; the environment may only lower them. */
+export const CEILINGS = {
+  /** Bytes of a request body, decompressed. */
+  bodyBytes: 64 * 1024 * 1024,
+  /** Samples of a climate. */
+  samples: 600_000,
+  /** Candidates of a comparison. */
+  candidates: 24,
+  /** Control periods of all candidates together, or as much work in another form. */
+  controlPeriods: 200_000_000,
+  /** Seconds of computing. */
+  computeSeconds: 50,
+} as const;
+
+/** The limits in force. */
+export type Limits = { [Name in keyof typeof CEILINGS]: number };
+
+/** How deep objects and arrays of a body may nest. */
+export const NESTING = 32;
+
+/** How long a climate may last, in years of 365.25 days. */
+export const CLIMATE_YEARS = 100;
