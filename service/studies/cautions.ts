@@ -1,6 +1,8 @@
 import { emptyCircuit } from "../core/diode/circuit.ts";
 import { openCircuitVoltage } from "../core/diode/junction-at-current.ts";
+import { SILICON_BANDGAP } from "../core/module/single-diode.ts";
 import { ruleDefinition } from "../core/rules/index.ts";
+import { coldFactor, coldVoltageByCoefficient, mostInSeries } from "./cold-voltage.ts";
 import type { TrackingRequest, TrackingRun } from "./tracking-run.ts";
 
 /** Something the reader must know before acting on the figures. */
@@ -15,7 +17,14 @@ const DEFER = "Local codes and a licensed designer decide.";
 
 /** The cautions that the input touches, most severe kinds first in the order below. */
 export function cautionsOf(request: TrackingRequest, run: TrackingRun, recordLow: number | null): Caution[] {
-  return [...coldVoltage(request, run, recordLow), ...interruptions(request, run), ...assumptions(run), planning()];
+  return [
+    ...coldVoltage(request, run, recordLow),
+    ...interruptions(request, run),
+    ...unusualSettings(run),
+    ...nearestFit(run),
+    ...assumptions(run),
+    planning(),
+  ];
 }
 
 function planning(): Caution {
@@ -31,19 +40,19 @@ function planning(): Caution {
 function coldVoltage(request: TrackingRequest, run: TrackingRun, recordLow: number | null): Caution[] {
   const cautions: Caution[] = [];
   const temperature = recordLow ?? run.climate.coldest;
-  const circuit = emptyCircuit();
-  run.built.module.circuitAt(1000, temperature, circuit);
-  const voltage = openCircuitVoltage(circuit) * request.array.modulesInSeries;
-  const values = { temperature, openCircuitVoltage: voltage };
+  const cold = coldModuleVoltage(request, run, temperature);
+  const voltage = cold.highest * request.array.modulesInSeries;
+  const values = { temperature, openCircuitVoltage: voltage, ...cold.values };
   const ratings = run.tracked.map(({ converter }) => converter.inputVoltageRating);
   const given = ratings.filter((rating) => rating !== null);
   const lowest = Math.min(...given);
   if (voltage > lowest) {
+    const most = mostInSeries(lowest, cold.highest);
     cautions.push({
       code: "cold-voltage-above-rating",
       severity: "danger",
-      detail: `At ${temperature} degC the array's open-circuit voltage is ${voltage.toFixed(1)} V, above the converter's input rating of ${lowest} V: it can destroy the converter. Use fewer modules in series. ${DEFER}`,
-      values: { ...values, inputVoltageRating: lowest },
+      detail: `At ${temperature} degC the array's open-circuit voltage reaches ${voltage.toFixed(1)} V, above the converter's input rating of ${lowest} V: it can destroy the converter and start a fire. At most ${most} of these modules in series stay below it. ${DEFER}`,
+      values: { ...values, inputVoltageRating: lowest, mostModulesInSeries: most },
     });
   }
   if (given.length < ratings.length) {
@@ -58,11 +67,31 @@ function coldVoltage(request: TrackingRequest, run: TrackingRun, recordLow: numb
     cautions.push({
       code: "series-cold-is-not-record-cold",
       severity: "info",
-      detail: `The coldest temperature of the series (${temperature} degC) was taken; the site's record low is colder. Give recordLowTemperature.`,
+      detail: `The coldest temperature of the series, ${temperature} degC, was taken; the site's record low is likely colder. Give recordLowTemperature.`,
       values: { temperature },
     });
   }
   return cautions;
+}
+
+/**
+ * Open-circuit voltage of one module in the cold, V: by its circuit at 1000 W/m2, by its coefficient, and, for
+ * crystalline silicon, by the published factor table; the highest of them counts.
+ */
+function coldModuleVoltage({ module, array }: TrackingRequest, run: TrackingRun, temperature: number) {
+  const { standard } = run.array;
+  const standardVoltage = standard.openCircuitVoltage / array.modulesInSeries;
+  const coefficient = standard.openCircuitVoltageCoefficient / standard.openCircuitVoltage;
+  const circuit = emptyCircuit();
+  run.built.module.circuitAt(1000, temperature, circuit);
+  const byCircuit = openCircuitVoltage(circuit);
+  const byCoefficient = coldVoltageByCoefficient(standardVoltage, coefficient, temperature);
+  const isSilicon =
+    module.kind === "test-generator" ? module.technology === "crystalline-silicon" : module.bandgap === SILICON_BANDGAP;
+  const factor = isSilicon ? coldFactor(temperature) : null;
+  const values: Record<string, number> = { moduleByCircuit: byCircuit, moduleByCoefficient: byCoefficient };
+  if (factor !== null) values["moduleByFactorTable"] = factor * standardVoltage;
+  return { highest: Math.max(...Object.values(values)), values };
 }
 
 /** What a rule that interrupts the power does to the converter's input. */
@@ -107,6 +136,39 @@ function assumptions(run: TrackingRun): Caution[] {
       severity: "info",
       detail: "No wind speed was given: 1 m/s was taken for the cell temperature.",
       values: { windSpeed: 1 },
+    },
+  ];
+}
+
+/** Settings outside what is usual in the trade: right perhaps, but worth a second look. */
+function unusualSettings(run: TrackingRun): Caution[] {
+  return run.tracked.flatMap(({ rule }) =>
+    Object.entries(ruleDefinition(rule.kind).parameters).flatMap(([name, parameter]): Caution[] => {
+      const value = rule.settings[name];
+      if (parameter.type !== "number" || parameter.usual === undefined || typeof value !== "number") return [];
+      const [low, high] = parameter.usual;
+      if (value >= low && value <= high) return [];
+      return [
+        {
+          code: "unusual-setting",
+          severity: "info",
+          detail: `${name} of ${rule.kind} is ${value}; usual are ${low} to ${high} (${parameter.source}).`,
+          values: { value, usualFrom: low, usualTo: high },
+        },
+      ];
+    }),
+  );
+}
+
+function nearestFit({ built }: TrackingRun): Caution[] {
+  if (built.fit !== "nearest" || built.misfits === null) return [];
+  return [
+    {
+      code: "nearest-circuit",
+      severity: "warning",
+      detail:
+        "No circuit meets the datasheet exactly; the nearest one was taken. Its relative misfits are in the values.",
+      values: { ...built.misfits },
     },
   ];
 }

@@ -45,17 +45,22 @@ const NoctSchema = z
       maximum: 90,
     }),
   })
-  .openapi("NoctModel", { description: "Nominal operating cell temperature: t = ta + (NOCT - 20)/800 G, in any wind." });
+  .openapi("NoctModel", {
+    description: "Nominal operating cell temperature: t = ta + (NOCT - 20)/800 G, in any wind.",
+  });
 
 const KingSchema = z
   .strictObject({
     kind: z.literal("king"),
     backing: z.enum(["glass", "polymer", "thin-film-steel"]).openapi({ description: "The back of the modules." }),
     place: z.enum(["open-rack", "close-roof", "insulated-back"]).openapi({
-      description: "How they stand. Measured: glass on open-rack and close-roof, polymer on open-rack and insulated-back, thin-film-steel on open-rack.",
+      description:
+        "How they stand. Measured: glass on open-rack and close-roof, polymer on open-rack and insulated-back, thin-film-steel on open-rack.",
     }),
   })
-  .openapi("KingModel", { description: "King et al. 2004, SAND2004-3535, eqs. 11 and 12, for one of its five mounts." });
+  .openapi("KingModel", {
+    description: "King et al. 2004, SAND2004-3535, eqs. 11 and 12, for one of its five mounts.",
+  });
 
 /** How the cell temperature follows from the ambient. */
 export const CellTemperatureModelSchema = z
@@ -80,7 +85,8 @@ const AmbientTemperatureSchema = z
     model: CellTemperatureModelSchema.optional(),
   })
   .openapi("AmbientTemperature", {
-    description: "Temperature of the air, and how the cells follow it (`model`: faiman with its defaults when left out).",
+    description:
+      "Temperature of the air, and how the cells follow it (`model`: faiman with its defaults when left out).",
   });
 
 /** The temperature of a climate. */
@@ -91,14 +97,11 @@ export const TemperatureSchema = z
 /** Equally spaced samples of irradiance and temperature. */
 export const ClimateSchema = z
   .strictObject({
-    start: z
-      .string()
-      .regex(INSTANT)
-      .openapi({
-        pattern: INSTANT.source,
-        description: "Start of the first sample, ISO 8601 with offset from UTC; months follow this clock.",
-        example: "2025-01-01T00:00:00+01:00",
-      }),
+    start: z.string().regex(INSTANT).openapi({
+      pattern: INSTANT.source,
+      description: "Start of the first sample, ISO 8601 with offset from UTC; months follow this clock.",
+      example: "2025-01-01T00:00:00+01:00",
+    }),
     step: quantity("s", "Time from one sample to the next.", { minimum: 1, maximum: 86_400 }),
     timing: z
       .enum(["mean", "instant"])
@@ -107,8 +110,12 @@ export const ClimateSchema = z
     gaps: z
       .enum(["refuse", "skip"])
       .default("refuse")
-      .openapi({ description: "What happens to missing samples (null): the request is refused, or they are left out." }),
+      .openapi({
+        description: "What happens to missing samples (null): the request is refused, or they are left out.",
+      }),
     irradiance: IrradianceSchema,
     temperature: TemperatureSchema,
   })
-  .openapi("Climate", { description: "Equally spaced samples of irradiance and temperature; columns of equal length." });
+  .openapi("Climate", {
+    description: "Equally spaced samples of irradiance and temperature; columns of equal length.",
+  });

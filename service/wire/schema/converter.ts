@@ -33,7 +33,11 @@ export const ConverterSchema = z
     trackingMaximumVoltage: quantity("V", "Upper end of the voltage window; null: none.", VOLTAGE)
       .nullable()
       .default(null),
-    inputVoltageRating: quantity("V", "Highest voltage the input bears, for the caution only; null: not known.", VOLTAGE)
+    inputVoltageRating: quantity(
+      "V",
+      "Highest voltage the input bears, for the caution only; null: not known.",
+      VOLTAGE,
+    )
       .nullable()
       .default(null),
     maximumPower: quantity("W", "Most the input takes; null: no limit.", { exclusiveMinimum: 0, maximum: 1e8 })

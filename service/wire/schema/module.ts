@@ -43,7 +43,10 @@ export const SingleDiodeSchema = z
     kind: z.literal("single-diode"),
     cellsInSeries: CELLS,
     photocurrent: quantity("A", "Photocurrent at standard test conditions.", CURRENT),
-    saturationCurrent: quantity("A", "Saturation current of the diode at 25 degC.", { exclusiveMinimum: 0, maximum: 1 }),
+    saturationCurrent: quantity("A", "Saturation current of the diode at 25 degC.", {
+      exclusiveMinimum: 0,
+      maximum: 1,
+    }),
     seriesResistance: quantity("ohm", "Series resistance of the module.", { minimum: 0, maximum: 100 }),
     shuntResistance: quantity("ohm", "Shunt resistance of the module at 1000 W/m2; null: infinite.", {
       exclusiveMinimum: 0,
@@ -75,7 +78,9 @@ export const TestGeneratorSchema = z
     }),
     maximumPowerVoltage: quantity("V", "Nominal voltage at maximum power.", { exclusiveMinimum: 0, maximum: 1500 }),
   })
-  .openapi("TestGeneratorModule", { description: "The generator of EN 50530:2010 Annex C and IEC 62891:2020 Annex A." });
+  .openapi("TestGeneratorModule", {
+    description: "The generator of EN 50530:2010 Annex C and IEC 62891:2020 Annex A.",
+  });
 
 /** One photovoltaic module. */
 export const ModuleSchema = z

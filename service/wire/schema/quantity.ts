@@ -37,5 +37,8 @@ export function reported(unit: string, description: string) {
 
 /** A number of an answer that may be absent: null, for the reason its description gives. */
 export function reportedOrNull(unit: string, description: string) {
-  return z.number().nullable().openapi({ description: withUnit(unit, description) });
+  return z
+    .number()
+    .nullable()
+    .openapi({ description: withUnit(unit, description) });
 }

@@ -18,10 +18,22 @@ const ParameterSchema = z
       .union([reported(VaryingUnit, "A number."), z.boolean(), z.string()])
       .nullable()
       .openapi({ description: "Null where it is derived or where there is none." }),
-    derivedDefault: z.string().nullable().openapi({ description: "In words, where the default follows from the array." }),
-    minimum: z.number().nullable().openapi({ description: `Unit: ${VaryingUnit}.` }),
-    exclusiveMinimum: z.number().nullable().openapi({ description: `Must be above this. Unit: ${VaryingUnit}.` }),
-    maximum: z.number().nullable().openapi({ description: `Unit: ${VaryingUnit}.` }),
+    derivedDefault: z
+      .string()
+      .nullable()
+      .openapi({ description: "In words, where the default follows from the array." }),
+    minimum: z
+      .number()
+      .nullable()
+      .openapi({ description: `Unit: ${VaryingUnit}.` }),
+    exclusiveMinimum: z
+      .number()
+      .nullable()
+      .openapi({ description: `Must be above this. Unit: ${VaryingUnit}.` }),
+    maximum: z
+      .number()
+      .nullable()
+      .openapi({ description: `Unit: ${VaryingUnit}.` }),
     integer: z.boolean().openapi({ description: "True where only whole numbers will do." }),
     choices: z.array(z.string()).nullable(),
     usual: RangeSchema.nullable(),
@@ -38,7 +50,9 @@ export const RuleCatalogueSchema = z
           kind: z.string(),
           title: z.string(),
           description: z.string(),
-          interrupts: z.string().openapi({ description: "What interrupts the power: nothing, open-circuit, short-circuit or sweep." }),
+          interrupts: z
+            .string()
+            .openapi({ description: "What interrupts the power: nothing, open-circuit, short-circuit or sweep." }),
           sources: z.array(z.string()),
           parameters: z.array(ParameterSchema),
         })
