@@ -1,72 +1,88 @@
 import type { CellTemperatureModel } from "./cell-temperature.ts";
-import { cellTemperatures } from "./cell-temperature.ts";
+import type { GapPolicy } from "./gaps.ts";
+import type { SkyModel } from "./plane-of-array.ts";
 
-/** Equally spaced samples of irradiance and temperature, as they were given; every column of shape [n], NaN: missing. */
+/** Where the modules stand and how their plane lies. */
+export interface Site {
+  /** Degrees, north positive. */
+  latitude: number;
+  /** Degrees, east positive. */
+  longitude: number;
+  /** Metres above sea level. */
+  elevation: number;
+  /** Degrees from the horizontal. */
+  tilt: number;
+  /** Degrees clockwise from north: 180 faces south. */
+  azimuth: number;
+  /** Share of the global irradiance that the ground throws back. */
+  albedo: number;
+}
+
+/** Irradiance on the modules' plane, W/m2. */
+export interface PlaneOfArrayIrradiance {
+  kind: "plane-of-array";
+  values: Float64Array;
+}
+
+/**
+ * Irradiance as weather stations have it, W/m2: global and diffuse on the horizontal, direct facing the sun; global alone
+ * or any two are enough.
+ */
+export interface HorizontalIrradiance {
+  kind: "horizontal";
+  global?: Float64Array;
+  directNormal?: Float64Array;
+  diffuse?: Float64Array;
+  site: Site;
+  /** Default "perez". */
+  skyModel?: SkyModel;
+}
+
+/** Cell temperature, degC. */
+export interface CellTemperatureColumn {
+  kind: "cell";
+  values: Float64Array;
+}
+
+/** Ambient temperature, degC, with wind speed, m/s, where known, and the model that makes cell temperature of them. */
+export interface AmbientTemperature {
+  kind: "ambient";
+  values: Float64Array;
+  windSpeed?: Float64Array | null;
+  /** Default Faiman 2008. */
+  model?: CellTemperatureModel;
+  /** Time constant of the module's heat, seconds; none or 0: at rest in every sample. */
+  thermalLag?: number;
+}
+
+/** A climate: equally spaced samples, SI units, NaN where a sample is missing. */
 export interface ClimateSeries {
-  /** Start of the first sample, ms since 1970-01-01 UTC. */
+  /** Start of the first sample, UTC milliseconds since 1970. */
   start: number;
-  /** Offset of the start's clock from UTC, ms; months follow it. */
+  /** What the caller's clock was ahead of UTC at the start, milliseconds. */
   utcOffset: number;
-  /** s. */
+  /** Seconds from sample to sample. */
   step: number;
-  /** Each sample is the mean over its step, or the value at its start. */
+  /** "mean": sample i is the mean over [t_i, t_i + step); "instant": the value at t_i. */
   timing: "mean" | "instant";
-  gaps: "refuse" | "skip";
-  irradiance: { kind: "plane-of-array"; values: Float64Array };
-  temperature:
-    | { kind: "cell"; values: Float64Array }
-    | { kind: "ambient"; values: Float64Array; windSpeed: Float64Array | null; model: CellTemperatureModel };
+  irradiance: PlaneOfArrayIrradiance | HorizontalIrradiance;
+  temperature: CellTemperatureColumn | AmbientTemperature;
+  /** Default "refuse". */
+  gaps?: GapPolicy;
 }
 
-/** A climate as the array feels it, every column of shape [n]. */
-export interface PreparedClimate {
-  /** Plane of array, W/m2; night readings below 0 count as 0. */
-  irradiance: Float64Array;
-  /** degC. */
-  cellTemperature: Float64Array;
-  /** 1 where a sample is missing and left out of every sum; null when none is. */
-  skipped: Uint8Array | null;
-  /** Coldest temperature given, night included, degC: ambient where known, else the cell's. */
-  coldest: number;
-  /** What was assumed, by code. */
-  assumptions: Assumption[];
+/** The instant, UTC milliseconds, at which the sun of sample 0 is taken: the middle of a mean, the instant itself. */
+export function firstSunInstant(series: ClimateSeries): number {
+  return series.timing === "mean" ? series.start + series.step * 500 : series.start;
 }
 
-/** Something the series did not say. */
-export type Assumption = "wind-speed";
-
-/** Wind speed taken where none is given, m/s: that of the NOCT conditions (IEC 61215). */
-export const ASSUMED_WIND = 1;
+/** Any column of the irradiance: they are all as long as the series. */
+export function irradianceColumn({ irradiance }: ClimateSeries): Float64Array {
+  if (irradiance.kind === "plane-of-array") return irradiance.values;
+  return irradiance.global ?? irradiance.directNormal ?? irradiance.diffuse ?? new Float64Array(0);
+}
 
 /** The number of samples. */
 export function sampleCount(series: ClimateSeries): number {
-  return series.irradiance.values.length;
-}
-
-/** Irradiance on the modules and their cell temperature from a series; the series is left as it is. */
-export function prepareClimate(series: ClimateSeries): PreparedClimate {
-  const { temperature } = series;
-  const irradiance = series.irradiance.values.map((value) => Math.max(0, value));
-  const assumptions: Assumption[] = [];
-  let cellTemperature = temperature.values;
-  let skipped = missing(irradiance, temperature.values);
-  if (temperature.kind === "ambient") {
-    if (temperature.windSpeed === null && temperature.model.kind !== "noct") assumptions.push("wind-speed");
-    const wind = temperature.windSpeed ?? ASSUMED_WIND;
-    cellTemperature = cellTemperatures(temperature.model, irradiance, temperature.values, wind);
-    skipped = missing(irradiance, cellTemperature);
-  }
-  let coldest = Number.POSITIVE_INFINITY;
-  for (const value of temperature.values) if (value < coldest) coldest = value;
-  return { irradiance, cellTemperature, skipped, coldest, assumptions };
-}
-
-function missing(irradiance: Float64Array, temperature: Float64Array): Uint8Array | null {
-  let skipped: Uint8Array | null = null;
-  for (let i = 0; i < irradiance.length; i++) {
-    if (!Number.isNaN(irradiance[i]) && !Number.isNaN(temperature[i])) continue;
-    skipped ??= new Uint8Array(irradiance.length);
-    skipped[i] = 1;
-  }
-  return skipped;
+  return irradianceColumn(series).length;
 }

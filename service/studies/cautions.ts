@@ -22,7 +22,7 @@ export function cautionsOf(request: TrackingRequest, run: TrackingRun, recordLow
     ...interruptions(request, run),
     ...unusualSettings(run),
     ...nearestFit(run),
-    ...assumptions(run),
+    ...climateNotices(run),
     planning(),
   ];
 }
@@ -128,16 +128,11 @@ function interruptions(request: TrackingRequest, run: TrackingRun): Caution[] {
   return cautions;
 }
 
-function assumptions(run: TrackingRun): Caution[] {
-  if (!run.climate.assumptions.includes("wind-speed")) return [];
-  return [
-    {
-      code: "wind-speed-assumed",
-      severity: "info",
-      detail: "No wind speed was given: 1 m/s was taken for the cell temperature.",
-      values: { windSpeed: 1 },
-    },
-  ];
+/** What the climate left open, and the mistakes it seems to hold. */
+function climateNotices({ climate }: TrackingRun): Caution[] {
+  const mistakes = climate.mistakes.map((notice): Caution => ({ ...notice, severity: "warning" }));
+  const notes = climate.notes.map((notice): Caution => ({ ...notice, severity: "info" }));
+  return [...mistakes, ...notes];
 }
 
 /** Settings outside what is usual in the trade: right perhaps, but worth a second look. */

@@ -1,8 +1,9 @@
 import { daysOf } from "../climate/calendar.ts";
 import type { Caution } from "./cautions.ts";
 import { cautionsOf } from "./cautions.ts";
+import type { Coverage } from "./climate-preparation.ts";
 import { StudyError } from "./study-error.ts";
-import type { Candidate, Coverage, Tracked, TrackingRequest, TrackingRun } from "./tracking-run.ts";
+import type { Candidate, Tracked, TrackingRequest, TrackingRun } from "./tracking-run.ts";
 import { runTracking } from "./tracking-run.ts";
 
 /** A rule on a converter under a name of the caller's, with a price where worth is asked for. */

@@ -1,6 +1,5 @@
 import { calendarOf } from "../climate/calendar.ts";
-import type { ClimateSeries, PreparedClimate } from "../climate/climate-series.ts";
-import { prepareClimate, sampleCount } from "../climate/climate-series.ts";
+import type { ClimateSeries } from "../climate/climate-series.ts";
 import type { Layout, PhotovoltaicArray } from "../core/array/array.ts";
 import { photovoltaicArray } from "../core/array/array.ts";
 import type { PointTrace } from "../core/array/maximum-power-trace.ts";
@@ -12,6 +11,8 @@ import type { Ledger, TraceChoice } from "../core/tracking/ledger.ts";
 import { openLedger } from "../core/tracking/ledger.ts";
 import { trackSteady } from "../core/tracking/steady.ts";
 import { trackStepped } from "../core/tracking/stepped.ts";
+import type { Coverage, StudyClimate } from "./climate-preparation.ts";
+import { prepareForStudy } from "./climate-preparation.ts";
 import type { ConverterChoice } from "./converter-choice.ts";
 import { buildConverter } from "./converter-choice.ts";
 import type { EnergySummary } from "./energy.ts";
@@ -19,7 +20,6 @@ import { summarize } from "./energy.ts";
 import type { BuiltModule, ModuleChoice } from "./module-choice.ts";
 import { buildModule } from "./module-choice.ts";
 import { checkRule } from "./rule-relations.ts";
-import { StudyError } from "./study-error.ts";
 
 /** How the rules are computed: sample by sample at rest, at their own control period, or as the step suggests. */
 export type Mode = "auto" | "steady" | "stepped";
@@ -42,13 +42,6 @@ export interface Candidate {
   pointer: string;
 }
 
-/** How many samples there were, and how many counted. */
-export interface Coverage {
-  samples: number;
-  used: number;
-  skipped: number;
-}
-
 /** A candidate with its defaults filled in and its sums. */
 export interface Tracked extends EnergySummary {
   rule: { kind: RuleChoice["kind"]; settings: Settings };
@@ -60,7 +53,7 @@ export interface Tracked extends EnergySummary {
 export interface TrackingRun {
   built: BuiltModule;
   array: PhotovoltaicArray;
-  climate: PreparedClimate;
+  climate: StudyClimate;
   coverage: Coverage;
   mode: "steady" | "stepped";
   modeReason: string;
@@ -80,9 +73,9 @@ export interface RunTraces extends TraceChoice {
 export function runTracking(request: TrackingRequest, candidates: Candidate[], traces: RunTraces): TrackingRun {
   const built = buildModule(request.module);
   const array = photovoltaicArray(built.module, request.array);
-  const climate = prepareClimate(request.climate);
-  const coverage = coverageOf(request.climate, climate);
-  const samples = coverage.samples;
+  const climate = prepareForStudy(request.climate);
+  const { coverage, insolation } = climate;
+  const { samples } = coverage;
   const { months, monthOf } = calendarOf(
     request.climate.start,
     request.climate.utcOffset,
@@ -105,7 +98,6 @@ export function runTracking(request: TrackingRequest, candidates: Candidate[], t
   const weather = { ...climate, spanOf: monthOf, step: request.climate.step, timing: request.climate.timing };
   if (mode === "steady") trackSteady(array, weather, contenders, maximum);
   else trackStepped(array, weather, contenders, maximum);
-  const insolation = insolationOf(climate, request.climate.step);
   const tracked = contenders.map(({ settings, ledger }, index) => ({
     rule: { kind: candidates[index].rule.kind, settings },
     converter: candidates[index].converter,
@@ -121,27 +113,4 @@ export function resolveMode(mode: Mode, step: number): { mode: "steady" | "stepp
   return step > LONGEST_STEPPED
     ? { mode: "steady", modeReason: `a step of ${step} s is longer than ${LONGEST_STEPPED} s` }
     : { mode: "stepped", modeReason: `a step of ${step} s is not longer than ${LONGEST_STEPPED} s` };
-}
-
-function coverageOf(series: ClimateSeries, climate: PreparedClimate): Coverage {
-  const samples = sampleCount(series);
-  let skipped = 0;
-  if (climate.skipped !== null) for (const one of climate.skipped) skipped += one;
-  if (skipped > 0 && series.gaps === "refuse") {
-    throw new StudyError(
-      "missing-samples",
-      "/climate",
-      `${skipped} of ${samples} samples are missing; fill them, or send "gaps": "skip" to leave them out of every sum.`,
-    );
-  }
-  return { samples, used: samples - skipped, skipped };
-}
-
-/** kWh/m2 over the samples that count. */
-function insolationOf(climate: PreparedClimate, step: number): number {
-  let sum = 0;
-  for (let i = 0; i < climate.irradiance.length; i++) {
-    if (climate.skipped === null || climate.skipped[i] === 0) sum += climate.irradiance[i];
-  }
-  return (sum * step) / 3.6e6;
 }

@@ -1,5 +1,5 @@
 import type { ClimateSeries } from "../climate/climate-series.ts";
-import { sampleCount } from "../climate/climate-series.ts";
+import { irradianceColumn, sampleCount } from "../climate/climate-series.ts";
 import type { RuleChoice } from "../core/rules/index.ts";
 import { ruleDefinition } from "../core/rules/index.ts";
 import { StudyError } from "./study-error.ts";
@@ -20,7 +20,7 @@ const RIPPLE_COST = 16;
  * (irradiance above 0 in the sample or in a neighbour).
  */
 export function workOf(climate: ClimateSeries, mode: Mode, candidates: readonly Candidate[]): number {
-  const lit = litSamples(climate.irradiance.values);
+  const lit = litSamples(irradianceColumn(climate));
   const stepped = resolveMode(mode, climate.step).mode === "stepped";
   let work = sampleCount(climate);
   for (const { rule, converter } of candidates) {

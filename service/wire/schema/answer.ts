@@ -32,11 +32,9 @@ export const EnergySchema = z
   .openapi("Energy", { description: "Energies over the whole climate." });
 
 /** Lost energy by cause. */
-export const LostByCauseSchema = z
-  .object(perCause((meaning) => reported("kWh", meaning)))
-  .openapi("LostByCause", {
-    description: "Lost energy by cause; the six add up to what is lost. One may be negative.",
-  });
+export const LostByCauseSchema = z.object(perCause((meaning) => reported("kWh", meaning))).openapi("LostByCause", {
+  description: "Lost energy by cause; the six add up to what is lost. One may be negative.",
+});
 
 /** One calendar month. */
 export const MonthSchema = z

@@ -107,12 +107,9 @@ export const ClimateSchema = z
       .enum(["mean", "instant"])
       .default("mean")
       .openapi({ description: "A sample is the mean over its step, or the value at its start." }),
-    gaps: z
-      .enum(["refuse", "skip"])
-      .default("refuse")
-      .openapi({
-        description: "What happens to missing samples (null): the request is refused, or they are left out.",
-      }),
+    gaps: z.enum(["refuse", "skip"]).default("refuse").openapi({
+      description: "What happens to missing samples (null): the request is refused, or they are left out.",
+    }),
     irradiance: IrradianceSchema,
     temperature: TemperatureSchema,
   })

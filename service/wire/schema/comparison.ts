@@ -19,7 +19,7 @@ import { ModeSchema, RecordLowSchema } from "./request-parts.ts";
 import { ResolvedRuleSchema, RuleSchema } from "./rule.ts";
 
 /** 1 to 100 characters without control characters: a pattern, since JSON Schema counts characters and JavaScript halves. */
-const LABEL = /^[^\u0000-\u001f\u007f]{1,100}$/u;
+const LABEL = /^\P{Cc}{1,100}$/u;
 const CURRENCY = /^[A-Z]{3}$/;
 
 const labelOf = (description: string) =>

@@ -29,12 +29,9 @@ export const EstimateRequestSchema = z
     rule: RuleSchema,
     climate: ClimateSchema,
     mode: ModeSchema,
-    traces: z
-      .enum(["full", "power", "causes", "none"])
-      .default("full")
-      .openapi({
-        description: "Columns of the answer: voltage, current and power; powers; lost energy by cause; none.",
-      }),
+    traces: z.enum(["full", "power", "causes", "none"]).default("full").openapi({
+      description: "Columns of the answer: voltage, current and power; powers; lost energy by cause; none.",
+    }),
     traceDecimals: quantity("1", "Decimals of the traces.", { minimum: 0, maximum: 9, integer: true }).default(3),
     recordLowTemperature: RecordLowSchema,
   })
