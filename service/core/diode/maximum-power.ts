@@ -13,6 +13,18 @@ const LAST_STEP = 1e-4;
 /** Beyond this ln(I0/IL) the power is below 1e-200 W: darkness. */
 const DARK = 460;
 
+/** A move, in units of a, over which the exponential is carried on by its series. */
+const SMALL_MOVE = 0.1;
+
+/** e^{-u} by its series, within 3e-15 for |u| up to 0.1. */
+function shrink(u: number): number {
+  return (
+    1 -
+    u *
+      (1 - u * (1 / 2 - u * (1 / 6 - u * (1 / 24 - u * (1 / 120 - u * (1 / 720 - u * (1 / 5040 - u * (1 / 40320))))))))
+  );
+}
+
 /**
  * Writes the maximum power point of a circuit into `point`; all 0 in the dark.
  *
@@ -55,20 +67,23 @@ export function maximumPower(circuit: Circuit, point: OperatingPoint): void {
     // The first exponential is the ideal diode's, not that of this u: it neither brackets nor ends the search.
     if (step > 0 && slope > 0) low = u;
     else if (step > 0) high = u;
-    const newton = slope / slope1;
-    let change = newton / (1 - (0.5 * newton * slope2) / slope1);
+    const perSlope = 1 / slope1;
+    const newton = slope * perSlope;
+    let change = newton / (1 - 0.5 * newton * slope2 * perSlope);
     let next = u - change;
     if (!(next >= low && next <= high)) {
       next = 0.5 * (low + high);
       change = u - next;
     }
     u = next;
-    if (step > 0 && Math.abs(change) <= LAST_STEP) {
-      // The exponential at the new u by its series: the next term is below 5e-18 of it.
-      diode *= 1 - change * (1 - change * (0.5 - change / 6));
-      break;
+    const size = Math.abs(change);
+    if (step > 0 && size <= SMALL_MOVE && b <= 1e-3) {
+      diode *= shrink(change);
+      if (size <= LAST_STEP) break;
+    } else {
+      diode = b > 1e-3 ? b + b * Math.expm1(u) : b * Math.exp(u);
+      if (step > 0 && size <= LAST_STEP) break;
     }
-    diode = b > 1e-3 ? b + b * Math.expm1(u) : b * Math.exp(u);
   }
   const junction = b > 1e-3 ? b * Math.expm1(u) : diode - b;
   current = 1 - junction - h * u;
