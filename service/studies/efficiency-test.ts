@@ -1,3 +1,4 @@
+import { laggedTemperatures } from "../climate/thermal-lag.ts";
 import type { PhotovoltaicArray } from "../core/array/array.ts";
 import { photovoltaicArray } from "../core/array/array.ts";
 import { emptyCondition, enterCondition } from "../core/array/condition.ts";
@@ -35,10 +36,20 @@ export interface EfficiencyTestRequest {
   rule: RuleChoice;
   converter: ConverterChoice;
   test: SequenceName | "static";
-  /** degC, constant. */
+  /** degC, constant; the ambient temperature where there is a lag. */
   cellTemperature: number;
+  /** Lets the cells warm with the light; null keeps their temperature constant, as the standard does. */
+  temperatureLag: TemperatureLag | null;
   /** Slope (W/m2/s) of the row whose course is wanted; null for none. */
   traceSlope: number | null;
+}
+
+/** Cells that follow the light with a first-order lag: cellTemperature + rise G/1000 at rest. */
+export interface TemperatureLag {
+  /** K at 1000 W/m2. */
+  rise: number;
+  /** s. */
+  timeConstant: number;
 }
 
 /** The course of one row, second by second: means over each span, and the extremes of its control periods. */
@@ -99,7 +110,15 @@ export function testEfficiency(request: EfficiencyTestRequest): EfficiencyTestRe
     rule: prepareRule(request.rule.kind, settings, ruleArray),
     converter: buildConverter(request.converter, array.standard),
     cellTemperature: request.cellTemperature,
+    temperatureLag: request.temperatureLag,
   };
+  if (request.test === "static" && request.temperatureLag !== null) {
+    throw new StudyError(
+      "lag-without-ramps",
+      "/temperatureLag",
+      "The static test is at rest: leave temperatureLag out.",
+    );
+  }
   const rule = { kind: request.rule.kind, settings };
   if (request.test === "static" && request.traceSlope !== null) {
     throw new StudyError("unknown-slope", "/traceSlope", "The static test has no slopes: leave traceSlope out.");
@@ -114,6 +133,7 @@ interface Bench {
   rule: TrackingRule;
   converter: Converter;
   cellTemperature: number;
+  temperatureLag: TemperatureLag | null;
 }
 
 /** Longest span of a traced row, s. */
@@ -124,14 +144,14 @@ function dynamicTest(bench: Bench, test: SequenceName, traceSlope: number | null
   let trace: RowTrace | null = null;
   for (const row of SEQUENCES[test].rows) {
     const traced = row.slope === traceSlope;
-    const series = rampSequence(test, row, traced ? TRACE_STEP : Number.POSITIVE_INFINITY);
+    const series = rampSequence(test, row, Math.min(traced ? TRACE_STEP : Number.POSITIVE_INFINITY, lagStep(bench)));
     const { irradiance, step, settling } = series;
     // Span 0 is the settling, which does not count; span 1 the ramps.
     const ledger = openLedger(irradiance.length, 2, { operating: traced, causes: false, extremes: traced });
     const maximum = traced ? emptyTrace(irradiance.length) : null;
     const weather = {
       irradiance,
-      cellTemperature: new Float64Array(irradiance.length).fill(bench.cellTemperature),
+      cellTemperature: temperaturesOf(bench, irradiance, step),
       skipped: null,
       spanOf: new Uint16Array(irradiance.length).fill(1, settling),
       step,
@@ -145,6 +165,18 @@ function dynamicTest(bench: Bench, test: SequenceName, traceSlope: number | null
   if (traceSlope !== null && trace === null) throw noSuchSlope(test);
   const efficiency = rows.reduce((sum, row) => sum + row.efficiency, 0) / rows.length;
   return { rows, efficiency, duration: rows.reduce((sum, row) => sum + row.duration, 0), trace };
+}
+
+/** Longest span that resolves a lag, s. */
+function lagStep({ temperatureLag }: Bench): number {
+  return temperatureLag === null ? Number.POSITIVE_INFINITY : Math.max(0.1, temperatureLag.timeConstant / 10);
+}
+
+/** Cell temperature at each sample, degC; with a lag the row starts at rest. */
+function temperaturesOf({ cellTemperature, temperatureLag }: Bench, irradiance: Float64Array, step: number) {
+  if (temperatureLag === null) return new Float64Array(irradiance.length).fill(cellTemperature);
+  const atRest = irradiance.map((value) => cellTemperature + (temperatureLag.rise * value) / 1000);
+  return laggedTemperatures(atRest, step, temperatureLag.timeConstant, "instant");
 }
 
 function noSuchSlope(test: SequenceName): StudyError {
