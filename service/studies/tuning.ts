@@ -1,0 +1,231 @@
+import { photovoltaicArray } from "../core/array/array.ts";
+import type { RuleChoice } from "../core/rules/index.ts";
+import { completeSettings, ruleDefinition } from "../core/rules/index.ts";
+import type { ConverterChoice } from "./converter-choice.ts";
+import { buildModule } from "./module-choice.ts";
+import { StudyError } from "./study-error.ts";
+import type { TrackingRequest } from "./tracking-run.ts";
+import { runTracking } from "./tracking-run.ts";
+import type { TuningScale } from "./tuning-scale.ts";
+import { scaleBetween } from "./tuning-scale.ts";
+
+/** One site of a tuning: its own array, converter and climate. */
+export interface TuningSite extends TrackingRequest {
+  label: string;
+  converter: ConverterChoice;
+}
+
+/** Which numeric setting of a rule is sought, over one site or many. */
+export interface TuningRequest {
+  sites: TuningSite[];
+  rule: RuleChoice;
+  parameter: string;
+  /** Null: around what is usual. */
+  range: { from: number; to: number } | null;
+  /** Points of the loss curve, 41 or more. */
+  points: number;
+}
+
+/** What a value of the setting loses: kWh, and of the available energy. */
+export interface LossAt {
+  value: number;
+  lost: number;
+  lostFraction: number | null;
+}
+
+/** One site's own optimum, and what the common setting costs it. */
+export interface TunedSite {
+  label: string;
+  available: number;
+  optimum: LossAt;
+  atCommon: LossAt;
+  /** Lost at the common setting beyond the site's own optimum, kWh, 0 or above. */
+  regret: number;
+}
+
+export interface TuningResult {
+  parameter: string;
+  unit: string;
+  /** The setting as it is now (given or default); with many sites of derived defaults, the first site's. */
+  today: LossAt;
+  optimum: LossAt;
+  /** Values within 0.1 points of the optimum's lost fraction, around it. */
+  flatRange: { from: number; to: number };
+  curve: LossAt[];
+  sites: TunedSite[];
+}
+
+/** Largest lost fraction beyond the optimum's that still counts as flat: 0.1 points. */
+const FLAT = 1e-3;
+/** Values tried in one pass when closing in, and passes: each shortens the bracket fivefold. */
+const REFINED = 9;
+const ROUNDS = 7;
+
+/**
+ * The value of a rule's setting that loses least over one site or many: a curve over the range, then the bracket around
+ * its lowest point closed in, 9 values a pass over the weather, to below 1e-5 of the range. @throws StudyError
+ */
+export function tune(request: TuningRequest): TuningResult {
+  const { parameter, unit, today } = tunedParameter(request);
+  const scale = scaleBetween(rangeOf(request, today));
+  const sites = request.sites.map((site) => new SiteLosses(site, request.rule, parameter));
+  const available = sites.map((site) => site.available);
+  const whole = (values: number[]): Float64Array => sum(sites.map((site) => site.lostAt(values)));
+  const total = available.reduce((a, b) => a + b, 0);
+  const at = (value: number, lost: number, of: number): LossAt => ({
+    value,
+    lost,
+    lostFraction: of > 0 ? lost / of : null,
+  });
+
+  const values = scale.spread(request.points);
+  const losses = whole(values);
+  const optimum = closeIn(scale, values, losses, whole);
+  const todayLost = whole([today])[0];
+  const common = todayLost < optimum.lost ? { value: today, lost: todayLost } : optimum;
+  return {
+    parameter,
+    unit,
+    today: at(today, todayLost, total),
+    optimum: at(common.value, common.lost, total),
+    flatRange: flatRange(values, losses, common, FLAT * total),
+    curve: values.map((value, k) => at(value, losses[k], total)),
+    sites: sites.map((site, k) => tuneSite(site, scale, values, common.value, (v, l) => at(v, l, available[k]))),
+  };
+}
+
+/** The losses of one site at values of the setting. */
+class SiteLosses {
+  readonly site: TuningSite;
+  readonly available: number;
+  private readonly rule: RuleChoice;
+  private readonly parameter: string;
+
+  constructor(site: TuningSite, rule: RuleChoice, parameter: string) {
+    this.site = site;
+    this.rule = rule;
+    this.parameter = parameter;
+    this.available = this.run([null])[0].energy.available;
+  }
+
+  /** Lost energy at each value, kWh, in one pass over the weather. */
+  lostAt(values: readonly number[]): Float64Array {
+    return Float64Array.from(this.run(values), ({ energy }) => energy.lost);
+  }
+
+  private run(values: readonly (number | null)[]) {
+    const candidates = values.map((value) => ({
+      rule: value === null ? this.rule : withSetting(this.rule, this.parameter, value),
+      converter: this.site.converter,
+      pointer: "/rule",
+    }));
+    return runTracking(this.site, candidates, { maximum: false, operating: false, causes: false }).tracked;
+  }
+}
+
+function tuneSite(
+  losses: SiteLosses,
+  scale: TuningScale,
+  values: number[],
+  common: number,
+  at: (value: number, lost: number) => LossAt,
+): TunedSite {
+  const lost = losses.lostAt([...values, common]);
+  const own = closeIn(scale, values, lost.subarray(0, values.length), (tried) => losses.lostAt(tried));
+  const atCommon = lost[values.length];
+  const best = atCommon < own.lost ? { value: common, lost: atCommon } : own;
+  return {
+    label: losses.site.label,
+    available: losses.available,
+    optimum: at(best.value, best.lost),
+    atCommon: at(common, atCommon),
+    regret: atCommon - best.lost,
+  };
+}
+
+/** Closes in on the lowest point of a sampled curve. */
+function closeIn(
+  scale: TuningScale,
+  values: readonly number[],
+  losses: Float64Array,
+  lossesAt: (values: number[]) => Float64Array,
+): { value: number; lost: number } {
+  let tried = [...values];
+  let lost = losses;
+  let best = { value: tried[0], lost: lost[0] };
+  for (let round = 0; round <= ROUNDS; round++) {
+    const lowest = lost.indexOf(Math.min(...lost));
+    if (lost[lowest] <= best.lost) best = { value: tried[lowest], lost: lost[lowest] };
+    if (round === ROUNDS) break;
+    const around = [tried[Math.max(0, lowest - 1)], tried[Math.min(tried.length - 1, lowest + 1)]] as const;
+    tried = scale.between(...around, REFINED);
+    lost = lossesAt(tried);
+  }
+  return best;
+}
+
+/** Where the curve around the optimum stays within `more` (kWh) of it, straight between its points. */
+function flatRange(values: number[], losses: Float64Array, best: { value: number; lost: number }, more: number) {
+  const limit = best.lost + more;
+  const crossing = (inside: [number, number], outside: [number, number]): number => {
+    const share = (limit - inside[1]) / (outside[1] - inside[1]);
+    return inside[0] + share * (outside[0] - inside[0]);
+  };
+  const walk = (indices: number[]): number => {
+    let inside: [number, number] = [best.value, best.lost];
+    for (const k of indices) {
+      if (losses[k] > limit) return crossing(inside, [values[k], losses[k]]);
+      inside = [values[k], losses[k]];
+    }
+    return inside[0];
+  };
+  const below = values.map((_, k) => k).filter((k) => values[k] < best.value);
+  const above = values.map((_, k) => k).filter((k) => values[k] > best.value);
+  return { from: walk(below.reverse()), to: walk(above) };
+}
+
+function sum(columns: Float64Array[]): Float64Array {
+  const total = new Float64Array(columns[0].length);
+  for (const column of columns) for (let k = 0; k < total.length; k++) total[k] += column[k];
+  return total;
+}
+
+function withSetting(rule: RuleChoice, parameter: string, value: number): RuleChoice {
+  return { kind: rule.kind, settings: { ...rule.settings, [parameter]: value } };
+}
+
+/** The setting's unit and its value today. @throws StudyError for one that is not a number of the rule */
+function tunedParameter({ sites, rule, parameter }: TuningRequest) {
+  const { parameters } = ruleDefinition(rule.kind);
+  const declared = parameters[parameter];
+  if (declared?.type !== "number" || declared.integer) {
+    const numbers = Object.keys(parameters).filter((name) => parameters[name].type === "number");
+    const detail =
+      numbers.length === 0
+        ? `${rule.kind} has no numeric setting to tune.`
+        : `${parameter} is no numeric setting of ${rule.kind}; tune one of: ${numbers.join(", ")}.`;
+    throw new StudyError("not-tunable", "/parameter", detail);
+  }
+  const [site] = sites;
+  const array = photovoltaicArray(buildModule(site.module).module, site.array);
+  const ruleArray = { modulesInSeries: site.array.modulesInSeries, standard: array.standard };
+  return { parameter, unit: declared.unit, today: completeSettings(rule, ruleArray)[parameter] as number };
+}
+
+/** The range asked for, or the usual one half as wide again on either side, inside what the setting allows. */
+function rangeOf({ rule, parameter, range }: TuningRequest, today: number): { from: number; to: number } {
+  const declared = ruleDefinition(rule.kind).parameters[parameter];
+  if (declared.type !== "number") throw new StudyError("not-tunable", "/parameter", "Not a number.");
+  const least = declared.minimum ?? declared.exclusiveMinimum ?? 0;
+  const [low, high] = declared.usual ?? [0.7 * today, 1.2 * today];
+  const margin = (high - low) / 2;
+  const from = range?.from ?? Math.max(least > 0 ? least : 0.1 * low, low - margin);
+  const to = range?.to ?? Math.min(declared.maximum, high + margin);
+  if (from < to && from >= least && to <= declared.maximum) return { from, to };
+  throw new StudyError(
+    "range-outside-setting",
+    "/range",
+    `The range ${from} to ${to} must rise and lie within ${least} to ${declared.maximum} ${declared.unit}.`,
+    `${least} to ${declared.maximum}`,
+  );
+}
