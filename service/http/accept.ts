@@ -20,5 +20,8 @@ export const checkAccept: MiddlewareHandler<Environment> = async (context, next)
   const accept = context.req.header("accept") ?? "";
   const weight = accept === "" ? 1 : weightOf(accept, ["application/json", "application/*", "*/*"]);
   if (weight !== null && weight > 0) return next();
-  return respondProblem(context, problem("not-acceptable", "Answers are application/json; let the Accept header say so."));
+  return respondProblem(
+    context,
+    problem("not-acceptable", "Answers are application/json; let the Accept header say so."),
+  );
 };

@@ -21,7 +21,9 @@ export function checkAccess(keys: readonly Key[]): MiddlewareHandler<Environment
     const name = bearer === null ? null : nameOf(bearer[1], keys);
     if (name === null) {
       const detail =
-        bearer === null ? "Send a key of the operator's as Authorization: Bearer <key>." : "This key is not known here.";
+        bearer === null
+          ? "Send a key of the operator's as Authorization: Bearer <key>."
+          : "This key is not known here.";
       return respondProblem(context, problem("unauthorized", detail), { "www-authenticate": 'Bearer realm="kneegap"' });
     }
     context.set("keyName", name);

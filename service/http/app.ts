@@ -51,7 +51,9 @@ function refusePath(methods: ReadonlyMap<string, string>) {
       return respondProblem(context, problem("not-found", "This path is none of the document's; see /openapi.json."));
     }
     const { method } = context.req;
-    return respondProblem(context, problem("method-not-allowed", `${method} does not fit here; use ${allow}.`), { allow });
+    return respondProblem(context, problem("method-not-allowed", `${method} does not fit here; use ${allow}.`), {
+      allow,
+    });
   };
 }
 

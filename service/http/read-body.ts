@@ -13,7 +13,9 @@ export type ReadBody = { ok: true; bytes: Uint8Array } | { ok: false; problem: P
 const refuse = (of: Problem): ReadBody => ({ ok: false, problem: of });
 
 function tooLarge(limit: number): ReadBody {
-  return refuse(problem("body-too-large", `The body is longer than ${limit} bytes, decompressed; send fewer samples at once.`));
+  return refuse(
+    problem("body-too-large", `The body is longer than ${limit} bytes, decompressed; send fewer samples at once.`),
+  );
 }
 
 /** Reads a JSON body, plain or gzip, within the limits of size and time; the size is checked while reading. */
@@ -44,7 +46,9 @@ async function inflate(bytes: Uint8Array, limit: number): Promise<ReadBody> {
     return { ok: true, bytes: await decompress(bytes, { maxOutputLength: limit }) };
   } catch (error) {
     if ((error as NodeJS.ErrnoException).code === "ERR_BUFFER_TOO_LARGE") return tooLarge(limit);
-    return refuse(problem("malformed-body", "The content-encoding says gzip, but the body is not a whole gzip stream."));
+    return refuse(
+      problem("malformed-body", "The content-encoding says gzip, but the body is not a whole gzip stream."),
+    );
   }
 }
 

@@ -12,7 +12,8 @@ const WORTH_COMPRESSING = 1024;
 export async function sendBytes(context: RequestContext, bytes: Uint8Array): Promise<Response> {
   const headers: Record<string, string> = { "content-type": "application/json", vary: "accept-encoding" };
   const asked = weightOf(context.req.header("accept-encoding") ?? "", ["gzip", "*"]) ?? 0;
-  if (asked === 0 || bytes.length < WORTH_COMPRESSING) return new Response(bytes as Uint8Array<ArrayBuffer>, { headers });
+  if (asked === 0 || bytes.length < WORTH_COMPRESSING)
+    return new Response(bytes as Uint8Array<ArrayBuffer>, { headers });
   const body = await compress(bytes, { level: 1 });
   return new Response(body, { headers: { ...headers, "content-encoding": "gzip" } });
 }

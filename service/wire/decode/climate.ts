@@ -5,9 +5,9 @@ import type { Limits } from "../limits.ts";
 import { CLIMATE_YEARS } from "../limits.ts";
 import type { Flaw } from "../problem.ts";
 import type { ClimateSchema } from "../schema/climate.ts";
+import { CellTemperatureModelSchema } from "../schema/climate.ts";
 import type { RawColumn } from "../schema/column.ts";
 import { toColumn } from "../schema/column.ts";
-import { CellTemperatureModelSchema } from "../schema/climate.ts";
 
 type RawClimate = z.output<typeof ClimateSchema>;
 
@@ -40,10 +40,24 @@ function checkLengths(climate: RawClimate, limits: Limits): Flaw[] {
   const { irradiance, temperature, step } = climate;
   const samples = irradiance.values.length;
   if (samples > limits.samples) {
-    return [{ pointer: "/climate/irradiance/values", code: "too-many", detail: `The climate has ${samples} samples.`, expected: `at most ${limits.samples} samples` }];
+    return [
+      {
+        pointer: "/climate/irradiance/values",
+        code: "too-many",
+        detail: `The climate has ${samples} samples.`,
+        expected: `at most ${limits.samples} samples`,
+      },
+    ];
   }
   if (samples * step > CLIMATE_YEARS * 365.25 * 86_400) {
-    return [{ pointer: "/climate/step", code: "too-long", detail: `${samples} samples of ${step} s last more than ${CLIMATE_YEARS} years.`, expected: `a climate of at most ${CLIMATE_YEARS} years` }];
+    return [
+      {
+        pointer: "/climate/step",
+        code: "too-long",
+        detail: `${samples} samples of ${step} s last more than ${CLIMATE_YEARS} years.`,
+        expected: `a climate of at most ${CLIMATE_YEARS} years`,
+      },
+    ];
   }
   const columns: [string, RawColumn | undefined][] = [
     ["/climate/temperature/values", temperature.values],
@@ -52,7 +66,14 @@ function checkLengths(climate: RawClimate, limits: Limits): Flaw[] {
   return columns.flatMap(([pointer, values]) =>
     values === undefined || values.length === samples
       ? []
-      : [{ pointer, code: "unequal-columns", detail: `This column has ${values.length} values, irradiance has ${samples}; give every column one value a sample.`, expected: `${samples} values` }],
+      : [
+          {
+            pointer,
+            code: "unequal-columns",
+            detail: `This column has ${values.length} values, irradiance has ${samples}; give every column one value a sample.`,
+            expected: `${samples} values`,
+          },
+        ],
   );
 }
 
@@ -64,11 +85,24 @@ function checkPresence({ irradiance, temperature }: RawClimate): Flaw[] {
   return columns.flatMap(([pointer, values]) =>
     values.some((value) => value !== null)
       ? []
-      : [{ pointer, code: "all-missing", detail: "Every sample of this column is missing.", expected: "at least one number" }],
+      : [
+          {
+            pointer,
+            code: "all-missing",
+            detail: "Every sample of this column is missing.",
+            expected: "at least one number",
+          },
+        ],
   );
 }
 
-const MOUNTS = ["glass open-rack", "glass close-roof", "polymer open-rack", "polymer insulated-back", "thin-film-steel open-rack"];
+const MOUNTS = [
+  "glass open-rack",
+  "glass close-roof",
+  "polymer open-rack",
+  "polymer insulated-back",
+  "thin-film-steel open-rack",
+];
 
 function checkMount({ temperature }: RawClimate): Flaw[] {
   if (temperature.kind !== "ambient" || temperature.model?.kind !== "king") return [];

@@ -59,7 +59,12 @@ function unknownMember(key: string, path: Path, { schema, root }: Refusal): Flaw
     meant === undefined
       ? `There is no member ${name} here.`
       : `There is no member ${name} here; did you mean "${meant}"?`;
-  return { pointer: pointerOf([...path, key]), code: "unknown-member", detail, expected: `one of: ${known.join(", ")}` };
+  return {
+    pointer: pointerOf([...path, key]),
+    code: "unknown-member",
+    detail,
+    expected: `one of: ${known.join(", ")}`,
+  };
 }
 
 function missing(path: Path, { schema, root }: Refusal): Flaw {
@@ -67,13 +72,22 @@ function missing(path: Path, { schema, root }: Refusal): Flaw {
   const kinds = name === "kind" ? kindsOf(schemaAt(schema, path.slice(0, -1), root)) : [];
   const unit = unitOf(schemaAt(schema, path, root) ?? {});
   const expected =
-    kinds.length > 0 ? { expected: `one of: ${kinds.join(", ")}` } : unit === undefined ? {} : { expected: `a number in ${unit}` };
+    kinds.length > 0
+      ? { expected: `one of: ${kinds.join(", ")}` }
+      : unit === undefined
+        ? {}
+        : { expected: `a number in ${unit}` };
   return { pointer: pointerOf(path), code: "missing", detail: `${name} is required.`, ...expected };
 }
 
 function wrongType(pointer: string, wanted: string, value: unknown): Flaw {
   const expected = /^[aeiou]/.test(wanted) ? `an ${wanted}` : `a ${wanted}`;
-  return { pointer, code: "wrong-type", detail: typeDetail(wanted, value), expected: wanted === "int" ? "a whole number" : expected };
+  return {
+    pointer,
+    code: "wrong-type",
+    detail: typeDetail(wanted, value),
+    expected: wanted === "int" ? "a whole number" : expected,
+  };
 }
 
 function typeDetail(wanted: string, value: unknown): string {
@@ -90,7 +104,11 @@ function typeDetail(wanted: string, value: unknown): string {
   return `${shown(value)} is ${Array.isArray(value) ? "an array" : `a ${typeof value}`}.`;
 }
 
-function wrongCount(issue: { code: string; minimum?: number | bigint; maximum?: number | bigint }, pointer: string, value: unknown): Flaw {
+function wrongCount(
+  issue: { code: string; minimum?: number | bigint; maximum?: number | bigint },
+  pointer: string,
+  value: unknown,
+): Flaw {
   const count = (value as unknown[]).length;
   const bound = issue.code === "too_small" ? `at least ${issue.minimum}` : `at most ${issue.maximum}`;
   const code = issue.code === "too_small" ? "too-few" : "too-many";
@@ -103,7 +121,12 @@ function outOfRange(path: Path, { schema, root }: Refusal): Flaw {
   const unit = unitOf(at) ?? "1";
   const expected = `${rangeOf(at)}${unit === "1" ? "" : ` ${unit}`}`;
   const hint = rangeHint({ value, path, root, unit, maximum: at.maxValue ?? Number.POSITIVE_INFINITY });
-  return { pointer: pointerOf(path), code: "out-of-range", detail: `${value} is out of range (${expected}).${hint}`, expected };
+  return {
+    pointer: pointerOf(path),
+    code: "out-of-range",
+    detail: `${value} is out of range (${expected}).${hint}`,
+    expected,
+  };
 }
 
 function rangeOf(schema: z.ZodNumber): string {
@@ -135,7 +158,8 @@ const FORMATS: Record<string, { expected: string; detail: (value: string) => str
 
 function wrongFormat(pointer: string, path: Path, value: string): Flaw {
   const format = FORMATS[String(path.at(-1))];
-  if (format !== undefined) return { pointer, code: "wrong-format", detail: format.detail(value), expected: format.expected };
+  if (format !== undefined)
+    return { pointer, code: "wrong-format", detail: format.detail(value), expected: format.expected };
   const expected = "1 to 100 characters, none of them a control character";
   return { pointer, code: "wrong-format", detail: `${shown(value)} will not do as a label.`, expected };
 }
@@ -148,17 +172,43 @@ function columnFlaw(path: Path, finding: ColumnFinding, { root }: Refusal): Flaw
   const more = wrong > 1 ? ` So are ${wrong - 1} more of this column.` : "";
   switch (finding.finding) {
     case "not-an-array":
-      return { pointer, code: "wrong-type", detail: `${shown(value)} is not a column.`, expected: "an array of numbers, null for a missing sample" };
+      return {
+        pointer,
+        code: "wrong-type",
+        detail: `${shown(value)} is not a column.`,
+        expected: "an array of numbers, null for a missing sample",
+      };
     case "empty":
-      return { pointer, code: "too-few", detail: "The column is empty; a climate has at least one sample.", expected: `${range}, one value a sample` };
+      return {
+        pointer,
+        code: "too-few",
+        detail: "The column is empty; a climate has at least one sample.",
+        expected: `${range}, one value a sample`,
+      };
     case "too-many":
-      return { pointer, code: "too-many", detail: `The column has ${(value as unknown[]).length} values.`, expected: "at most 600000 samples" };
+      return {
+        pointer,
+        code: "too-many",
+        detail: `The column has ${(value as unknown[]).length} values.`,
+        expected: "at most 600000 samples",
+      };
     case "not-a-number":
-      return { pointer, code: "wrong-type", detail: `${typeDetail("number", value)}${more}`, expected: "a number, or null for a missing sample" };
+      return {
+        pointer,
+        code: "wrong-type",
+        detail: `${typeDetail("number", value)}${more}`,
+        expected: "a number, or null for a missing sample",
+      };
     case "out-of-range": {
-      if (!Number.isFinite(value)) return { pointer, code: "wrong-type", detail: typeDetail("number", value), expected: range };
+      if (!Number.isFinite(value))
+        return { pointer, code: "wrong-type", detail: typeDetail("number", value), expected: range };
       const hint = rangeHint({ value, path, root, unit, maximum });
-      return { pointer, code: "out-of-range", detail: `${value} is out of range (${range}).${hint}${more}`, expected: range };
+      return {
+        pointer,
+        code: "out-of-range",
+        detail: `${value} is out of range (${range}).${hint}${more}`,
+        expected: range,
+      };
     }
   }
 }

@@ -60,7 +60,11 @@ export function jsonFault(text: string): JsonFault | null {
       const closer = closers.at(-1);
       if (closer === undefined) return index === text.length ? null : { index, reason: "the value has ended before" };
       if (here === closer) closers.pop();
-      else if (here !== ",") return { index, reason: here === "" ? "the text ends too early; was it cut off?" : `"," or "${closer}" belongs here` };
+      else if (here !== ",")
+        return {
+          index,
+          reason: here === "" ? "the text ends too early; was it cut off?" : `"," or "${closer}" belongs here`,
+        };
       else expects = closer === "}" ? "name" : "value";
       index++;
     } else if (expects === "name") {

@@ -9,13 +9,18 @@ type RawDatasheet = z.output<typeof DatasheetSchema>;
 
 /** What is wrong between the members of a module. */
 export function checkModule(module: RawModule): Flaw[] {
-  if (module.kind === "datasheet") return [...checkMaximumPower(module), ...checkCells(module), ...checkCoefficients(module)];
+  if (module.kind === "datasheet")
+    return [...checkMaximumPower(module), ...checkCells(module), ...checkCoefficients(module)];
   return module.kind === "single-diode" ? checkIdeality(module) : [];
 }
 
 function checkMaximumPower(of: RawDatasheet): Flaw[] {
   const flaws: Flaw[] = [];
-  const below = (low: "maximumPowerVoltage" | "maximumPowerCurrent", high: "openCircuitVoltage" | "shortCircuitCurrent", unit: string) => {
+  const below = (
+    low: "maximumPowerVoltage" | "maximumPowerCurrent",
+    high: "openCircuitVoltage" | "shortCircuitCurrent",
+    unit: string,
+  ) => {
     if (of[low] < of[high]) return;
     flaws.push({
       pointer: `/module/${low}`,

@@ -1,8 +1,7 @@
 import type { z } from "@hono/zod-openapi";
 import type { RuleChoice } from "../../core/rules/index.ts";
-import type { RawRule } from "../schema/rule.ts";
-import type { RuleSchema } from "../schema/rule.ts";
 import { toColumn } from "../schema/column.ts";
+import type { RawRule, RuleSchema } from "../schema/rule.ts";
 
 /** A rule of the wire as the studies take it. */
 export function decodeRule(rule: z.output<typeof RuleSchema>): RuleChoice {

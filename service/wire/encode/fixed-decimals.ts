@@ -43,7 +43,8 @@ function writeText(out: Uint8Array, at: number, text: string): number {
 function writeRatio(out: Uint8Array, at: number, magnitude: number, scale: number, decimals: number): number {
   // Exact: below 1e15 the quotient is never rounded up to the next whole number.
   const whole = Math.floor(magnitude / scale);
-  if (whole > 0x7fffffff || (whole === 0 && magnitude * 1e6 < scale)) return writeText(out, at, String(magnitude / scale));
+  if (whole > 0x7fffffff || (whole === 0 && magnitude * 1e6 < scale))
+    return writeText(out, at, String(magnitude / scale));
   let end = writeDigits(out, at, whole, digitsOf(whole));
   let fraction = magnitude - whole * scale;
   if (fraction === 0) return end;
@@ -74,7 +75,12 @@ function writeValue(out: Uint8Array, at: number, value: number, scale: number, d
  * Writes a column as JSON array: the very bytes that JSON.stringify gives for its values rounded to `decimals` (0 ... 9)
  * decimals. NaN, Infinity and samples marked in `skipped` (shape [n], or null) become null; an empty column `[]`.
  */
-export function writeColumn(writer: ByteWriter, values: Float64Array, decimals: number, skipped: Uint8Array | null): void {
+export function writeColumn(
+  writer: ByteWriter,
+  values: Float64Array,
+  decimals: number,
+  skipped: Uint8Array | null,
+): void {
   const scale = Number(`1e${decimals}`);
   writer.ensure(2);
   writer.bytes[writer.length++] = OPEN;

@@ -1,0 +1,51 @@
+import { CEILINGS } from "../wire/limits.ts";
+import type { OperationName } from "../wire/operations.ts";
+import { performOperation } from "../wire/operations.ts";
+
+/** An invented module, of the size of a common one. */
+const MODULE = {
+  kind: "datasheet",
+  cellsInSeries: 60,
+  shortCircuitCurrent: 9.91,
+  openCircuitVoltage: 38.9,
+  maximumPowerCurrent: 9.36,
+  maximumPowerVoltage: 31.8,
+  shortCircuitCurrentCoefficient: 0.05,
+  openCircuitVoltageCoefficient: -0.29,
+};
+
+/** An invented spring day at a landing stage of the Saltmarsh Ferries, every third hour. */
+const CLIMATE = {
+  start: "2025-04-12T00:00:00+02:00",
+  step: 10_800,
+  irradiance: { kind: "plane-of-array", values: [0, 0, 120, 560, 810, 470, 60, 0] },
+  temperature: { kind: "ambient", values: [4.1, 3.6, 7.2, 11.8, 14.9, 14.1, 9.3, 6] },
+};
+
+/** The request example of `estimate`. */
+export const ESTIMATE_EXAMPLE = { module: MODULE, rule: { kind: "fractional-open-circuit-voltage" }, climate: CLIMATE };
+
+/** The request example of `compare`. */
+export const COMPARISON_EXAMPLE = {
+  module: MODULE,
+  array: { modulesInSeries: 2 },
+  candidates: [
+    { label: "one voltage", rule: { kind: "constant-voltage", setVoltagePerModule: 29 }, price: 120 },
+    { label: "climbs", rule: { kind: "perturb-and-observe", stepFraction: 0.005 }, price: 180 },
+  ],
+  baseline: "one voltage",
+  climate: CLIMATE,
+  energyValue: { currency: "EUR", perKilowattHour: 0.24 },
+};
+
+/**
+ * What the service answers to an example, its numbers shortened to six digits so that the document reads well and does
+ * not change with the last bits. Throws Error for an example that is refused.
+ */
+export function exampleAnswer(operation: OperationName, request: object): unknown {
+  const answer = performOperation(operation, new TextEncoder().encode(JSON.stringify(request)), CEILINGS);
+  if (!answer.ok) throw new Error(`the example of ${operation} is refused: ${answer.problem.detail}`);
+  return JSON.parse(new TextDecoder().decode(answer.bytes), (_name, value: unknown) =>
+    typeof value === "number" ? Number(value.toPrecision(6)) : value,
+  );
+}

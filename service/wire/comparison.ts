@@ -1,0 +1,115 @@
+import type { z } from "@hono/zod-openapi";
+import { sampleCount } from "../climate/climate-series.ts";
+import type { ComparisonRequest } from "../studies/comparison.ts";
+import { compare } from "../studies/comparison.ts";
+import { checkClimate, decodeClimate } from "./decode/climate.ts";
+import { checkConverter, decodeConverter } from "./decode/converter.ts";
+import { checkModule, decodeModule } from "./decode/module.ts";
+import { nearestName } from "./decode/nearest-name.ts";
+import { decodeRule } from "./decode/rule.ts";
+import { defineOperation } from "./define-operation.ts";
+import { jsonText } from "./encode/byte-writer.ts";
+import { encodeModule } from "./encode/module.ts";
+import { digestClimate, encodeProvenance } from "./encode/provenance.ts";
+import { encodeConverter, encodeRule } from "./encode/resolved.ts";
+import type { Limits } from "./limits.ts";
+import type { Flaw } from "./problem.ts";
+import { ArraySchema } from "./schema/array.ts";
+import { ComparisonRequestSchema } from "./schema/comparison.ts";
+import { trackingWork } from "./work.ts";
+
+type Raw = z.output<typeof ComparisonRequestSchema>;
+
+function check(raw: Raw, limits: Limits): Flaw[] {
+  return [
+    ...checkModule(raw.module),
+    ...checkConverter(raw.converter, "/converter"),
+    ...raw.candidates.flatMap(({ converter }, index) => checkConverter(converter, `/candidates/${index}/converter`)),
+    ...checkCandidates(raw, limits),
+    ...checkClimate(raw.climate, limits),
+  ];
+}
+
+function checkCandidates({ candidates, baseline }: Raw, limits: Limits): Flaw[] {
+  if (candidates.length > limits.candidates) {
+    const detail = `There are ${candidates.length} candidates.`;
+    return [{ pointer: "/candidates", code: "too-many", detail, expected: `at most ${limits.candidates} candidates` }];
+  }
+  const flaws: Flaw[] = [];
+  const labels = candidates.map(({ label }) => label);
+  for (const [index, label] of labels.entries()) {
+    if (labels.indexOf(label) === index) continue;
+    const detail = `The label "${label}" is that of candidate ${labels.indexOf(label)} too; give each its own.`;
+    flaws.push({
+      pointer: `/candidates/${index}/label`,
+      code: "label-taken",
+      detail,
+      expected: "a label not used before",
+    });
+  }
+  if (baseline !== undefined && !labels.includes(baseline)) {
+    const meant = nearestName(baseline, labels);
+    const question = meant === undefined ? "" : ` Did you mean "${meant}"?`;
+    const detail = `No candidate is labelled "${baseline}".${question}`;
+    flaws.push({ pointer: "/baseline", code: "unknown-baseline", detail, expected: `one of: ${labels.join(", ")}` });
+  }
+  return flaws;
+}
+
+function decode(raw: Raw): ComparisonRequest {
+  return {
+    module: decodeModule(raw.module),
+    array: raw.array ?? ArraySchema.parse({}),
+    climate: decodeClimate(raw.climate),
+    mode: raw.mode,
+    candidates: raw.candidates.map((candidate, index) => ({
+      label: candidate.label,
+      rule: decodeRule(candidate.rule),
+      converter: decodeConverter(candidate.converter ?? raw.converter),
+      price: candidate.price ?? null,
+      pointer: `/candidates/${index}/rule`,
+    })),
+    baseline: raw.baseline ?? null,
+    energyValue: raw.energyValue ?? null,
+    recordLowTemperature: raw.recordLowTemperature,
+  };
+}
+
+function answer(request: ComparisonRequest, raw: Raw): Uint8Array {
+  const { run, baseline, results, cautions } = compare(request);
+  const { array, energyValue } = request;
+  const candidates = request.candidates.map(({ label, price }, index) => {
+    const { rule, converter } = run.tracked[index];
+    return { label, rule: encodeRule(rule), converter: encodeConverter(converter), price };
+  });
+  const resolved = { array, candidates, baseline, energyValue, mode: run.mode, modeReason: run.modeReason };
+  const digested = {
+    module: raw.module,
+    array,
+    candidates: candidates.map((candidate, index) => {
+      const { kind, settings } = run.tracked[index].rule;
+      return { ...candidate, rule: { kind, ...settings } };
+    }),
+    baseline,
+    climate: digestClimate(request.climate),
+    mode: run.mode,
+    energyValue,
+    recordLowTemperature: request.recordLowTemperature,
+  };
+  const shown = results.map(({ label, rank, tracked, ...figures }) => {
+    return { label, rank, energy: tracked.energy, lostByCause: tracked.lostByCause, ...figures };
+  });
+  const module = encodeModule(run.built, request.module);
+  const provenance = encodeProvenance(request, run, digested);
+  const body = { resolved, results: shown, coverage: run.coverage, module, cautions, provenance };
+  return new TextEncoder().encode(jsonText(body));
+}
+
+/** POST /v1/comparisons on bytes. */
+export const comparisonOperation = defineOperation({
+  schema: ComparisonRequestSchema,
+  check,
+  decode,
+  work: ({ candidates, array, climate }) => trackingWork(candidates, array, sampleCount(climate)),
+  answer,
+});

@@ -1,0 +1,68 @@
+import type { z } from "@hono/zod-openapi";
+import { CoreError } from "../core/errors.ts";
+import { StudyError } from "../studies/study-error.ts";
+import { explain } from "./decode/explain.ts";
+import { parseBody } from "./decode/parse-body.ts";
+import type { Limits } from "./limits.ts";
+import type { Answer, Operation } from "./operation.ts";
+import type { Flaw, Problem } from "./problem.ts";
+import { flawed, problem } from "./problem.ts";
+
+/** How one operation reads, checks, works and writes. */
+export interface Definition<Schema extends z.ZodType, Request> {
+  schema: Schema;
+  /** What is wrong between the members of a request that has the right form. */
+  check: (raw: z.output<Schema>, limits: Limits) => Flaw[];
+  /** Plain data for the study. */
+  decode: (raw: z.output<Schema>) => Request;
+  /** In control periods, or as much work in another form. */
+  work: (request: Request) => number;
+  /** The study and its answer as JSON bytes. */
+  answer: (request: Request, raw: z.output<Schema>) => Uint8Array;
+}
+
+const refuse = (of: Problem) => ({ ok: false as const, problem: of });
+
+/** An operation: bytes are parsed, checked against the schema and against each other, measured, and then worked on. */
+export function defineOperation<Schema extends z.ZodType, Request>(of: Definition<Schema, Request>): Operation {
+  return (body, limits) => {
+    const parsed = parseBody(body);
+    if (!parsed.ok) return parsed;
+    const read = of.schema.safeParse(parsed.value);
+    if (!read.success) return refuse(flawed(explain(read.error.issues, of.schema, parsed.value)));
+    const flaws = of.check(read.data, limits);
+    if (flaws.length > 0) return refuse(flawed(flaws));
+    const request = of.decode(read.data);
+    const work = of.work(request);
+    if (work > limits.controlPeriods) return refuse(tooMuch(work, limits.controlPeriods));
+    return { ok: true, prepared: { work, perform: () => perform(() => of.answer(request, read.data)) } };
+  };
+}
+
+function tooMuch(work: number, limit: number): Problem {
+  return problem(
+    "too-much-work",
+    `The request is as much work as ${Math.round(work)} control periods; the limit is ${limit}. Send fewer samples or candidates at once, or a coarser step.`,
+  );
+}
+
+/** Answers, or says why physics refuses; no error gets out, since it would not cross a thread whole. */
+function perform(answer: () => Uint8Array): Answer {
+  try {
+    return { ok: true, bytes: answer(), contentType: "application/json" };
+  } catch (error) {
+    if (error instanceof StudyError) {
+      const { pointer, code, message, expected } = error;
+      return refuse(flawed([{ pointer, code, detail: message, ...(expected === undefined ? {} : { expected }) }]));
+    }
+    if (error instanceof CoreError) return refuse(flawed([{ pointer: "", code: error.code, detail: error.message }]));
+    return failure(error);
+  }
+}
+
+/** The answer of a defect: nothing of it leaks, the log gets it as plain text. */
+export function failure(error: unknown): Answer {
+  const detail = "The service failed at this request; quote the request id.";
+  const fault = error instanceof Error ? (error.stack ?? error.message) : String(error);
+  return { ok: false, problem: problem("internal", detail), fault };
+}
