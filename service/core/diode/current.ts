@@ -3,6 +3,8 @@ import type { Circuit } from "./circuit.ts";
 const MAXIMUM_STEPS = 64;
 /** A Halley step this small, in units of a, leaves an error below 1e-13 a (cubic convergence). */
 const LAST_STEP = 1e-4;
+/** Above this I0/IL the diode's current is taken as I0 (e^{x/a} - 1), lest the difference lose digits. */
+const HOT = 1e-3;
 
 /**
  * Current (A) at terminal voltage `voltage` (V): the root x of x - V - Rs I(x) = 0, then I(x).
@@ -12,6 +14,7 @@ const LAST_STEP = 1e-4;
  */
 export function currentAt(circuit: Circuit, voltage: number): number {
   const { logSaturationCurrent, idealityVoltage: a, seriesResistance, shuntConductance } = circuit;
+  if (circuit.saturationCurrent > HOT * circuit.photocurrent) return hotCurrentAt(circuit, voltage);
   const source = circuit.photocurrent + circuit.saturationCurrent;
   if (seriesResistance === 0) {
     return source - Math.exp(logSaturationCurrent + voltage / a) - shuntConductance * voltage;
@@ -38,6 +41,36 @@ export function currentAt(circuit: Circuit, voltage: number): number {
     diode = Math.exp(logSaturationCurrent + x / a);
   }
   return source - diode - shuntConductance * x;
+}
+
+/** `currentAt` where the saturation current is not small beside the light's: hot cells in the dimmest light. */
+function hotCurrentAt(circuit: Circuit, voltage: number): number {
+  const { photocurrent, saturationCurrent, idealityVoltage: a, seriesResistance, shuntConductance } = circuit;
+  const currentThrough = (x: number): number =>
+    photocurrent - saturationCurrent * Math.expm1(x / a) - shuntConductance * x;
+  if (seriesResistance === 0) return currentThrough(voltage);
+  const reach = photocurrent + saturationCurrent + Math.max(0, voltage) / seriesResistance;
+  let x = voltage + seriesResistance * photocurrent;
+  if (saturationCurrent * Math.exp(x / a) > reach) x = a * Math.log(reach / saturationCurrent);
+  for (let step = 0; step < MAXIMUM_STEPS; step++) {
+    const slope = 1 + seriesResistance * ((saturationCurrent * Math.exp(x / a)) / a + shuntConductance);
+    const change = (x - voltage - seriesResistance * currentThrough(x)) / slope;
+    x -= change;
+    if (Math.abs(change) <= 1e-16 * Math.abs(x)) break;
+  }
+  return currentThrough(x);
+}
+
+/**
+ * dP/dV (A) at terminal voltage `voltage` (V) of a lit circuit, from the exact derivative of the implicit equation:
+ * I + V dI/dV with dI/dV = -g/(1 + Rs g), g = I0 e^{x/a}/a + 1/Rsh. Accuracy as `currentAt`.
+ */
+export function powerSlopeAt(circuit: Circuit, voltage: number): number {
+  const { logSaturationCurrent, idealityVoltage: a, seriesResistance, shuntConductance } = circuit;
+  const current = currentAt(circuit, voltage);
+  const diode = Math.exp(logSaturationCurrent + (voltage + seriesResistance * current) / a);
+  const conductance = diode / a + shuntConductance;
+  return current - (voltage * conductance) / (1 + seriesResistance * conductance);
 }
 
 /** Short-circuit current, A: the current at 0 V. 0 in the dark. Accuracy as `currentAt`. */

@@ -81,7 +81,7 @@ export function maximumPower(circuit: Circuit, point: OperatingPoint): void {
       diode *= shrink(change);
       if (size <= LAST_STEP) break;
     } else {
-      diode = b > 1e-3 ? b + b * Math.expm1(u) : b * Math.exp(u);
+      diode = b > 1e-3 ? b + b * Math.expm1(u) : Math.exp(u + logRatio);
       if (step > 0 && size <= LAST_STEP) break;
     }
   }

@@ -1,6 +1,6 @@
 import { STANDARD_IRRADIANCE, STANDARD_TEMPERATURE, ZERO_CELSIUS } from "../constants.ts";
 import { emptyCircuit } from "../diode/circuit.ts";
-import { currentAt, shortCircuitCurrent } from "../diode/current.ts";
+import { currentAt, powerSlopeAt, shortCircuitCurrent } from "../diode/current.ts";
 import { openCircuitVoltage } from "../diode/junction-at-current.ts";
 import { bracketedRoot } from "../numeric/bracketed-root.ts";
 import type { SingleDiodeParameters } from "./single-diode.ts";
@@ -35,6 +35,8 @@ export interface Misfits {
 const WARM = STANDARD_TEMPERATURE + 10;
 const WARM_RATIO = (WARM + ZERO_CELSIUS) / (STANDARD_TEMPERATURE + ZERO_CELSIUS);
 const RESISTANCE_STEPS = 64;
+/** How far outside its bounds a root may lie by rounding, in the scale of the datasheet. */
+const BOUND_ROUNDING = 1e-9;
 /** Bounds of Voc/a: from a far too soft to a far too sharp knee for any diode. */
 const SOFTEST = 3;
 const SHARPEST = 300;
@@ -108,7 +110,9 @@ export function exactDatasheetFit(of: Datasheet): SingleDiodeParameters | null {
   const highest = (of.openCircuitVoltage - of.maximumPowerVoltage) / of.maximumPowerCurrent;
   let last = 0;
   let lastResidual = slopeResidual(of, 0);
-  if (lastResidual === 0) return acceptable(of, 0);
+  // A root at the bound itself may lie outside by rounding.
+  const atBound = Math.abs(lastResidual) <= BOUND_ROUNDING ? acceptable(of, 0) : null;
+  if (atBound !== null) return atBound;
   for (let k = 1; k < RESISTANCE_STEPS; k++) {
     const next = (highest * k) / RESISTANCE_STEPS;
     const residual = slopeResidual(of, next);
@@ -126,6 +130,8 @@ export function exactDatasheetFit(of: Datasheet): SingleDiodeParameters | null {
 function acceptable(of: Datasheet, seriesResistance: number): SingleDiodeParameters | null {
   if (Number.isNaN(seriesResistance)) return null;
   const found = parametersFor(of, seriesResistance);
+  const leastShunt = -BOUND_ROUNDING * (of.shortCircuitCurrent / of.openCircuitVoltage);
+  if (found.shuntConductance < 0 && found.shuntConductance >= leastShunt) found.shuntConductance = 0;
   if (!(found.shuntConductance >= 0 && found.photocurrent > 0 && Number.isFinite(found.logSaturationCurrent))) {
     return null;
   }
@@ -142,16 +148,11 @@ export function datasheetMisfits(of: Datasheet, parameters: SingleDiodeParameter
   module.circuitAt(STANDARD_IRRADIANCE, STANDARD_TEMPERATURE, circuit);
   const voltage = openCircuitVoltage(circuit);
   const current = currentAt(circuit, of.maximumPowerVoltage);
-  const junction = of.maximumPowerVoltage + circuit.seriesResistance * current;
-  const conductance =
-    Math.exp(circuit.logSaturationCurrent + junction / circuit.idealityVoltage) / circuit.idealityVoltage +
-    circuit.shuntConductance;
-  const slope = -conductance / (1 + circuit.seriesResistance * conductance);
   return {
     shortCircuitCurrent: shortCircuitCurrent(circuit) / of.shortCircuitCurrent - 1,
     openCircuitVoltage: voltage / of.openCircuitVoltage - 1,
     maximumPowerCurrent: current / of.maximumPowerCurrent - 1,
-    maximumPowerSlope: (current + of.maximumPowerVoltage * slope) / of.maximumPowerCurrent,
+    maximumPowerSlope: powerSlopeAt(circuit, of.maximumPowerVoltage) / of.maximumPowerCurrent,
     openCircuitVoltageCoefficient: (warmVoltage - voltage) / (10 * of.openCircuitVoltageCoefficient) - 1,
   };
 }

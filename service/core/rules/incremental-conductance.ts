@@ -1,6 +1,9 @@
 import type { Direction, Seen } from "./rule.ts";
 import { CLIMB_STEP_FRACTION, controlPeriod, defineRule } from "./rule.ts";
 
+/** Voltages this near each other, relatively, are the same: a converter held at its limit differs by rounding alone. */
+const SAME_VOLTAGE = 1e-9;
+
 /** Up, down or stay, as a signed slope compares with its tolerance. */
 function towards(slope: number, tolerance: number): Direction {
   if (slope > tolerance) return 1;
@@ -51,7 +54,8 @@ export const incrementalConductance = defineRule({
       const { earlierVoltage, earlierCurrent, voltage, current } = seen;
       if (!(current > 0) || Number.isNaN(earlierVoltage)) return -1;
       const change = current - earlierCurrent;
-      if (voltage === earlierVoltage) return towards(change / current, settings.currentTolerance);
+      if (Math.abs(voltage - earlierVoltage) <= SAME_VOLTAGE * voltage)
+        return towards(change / current, settings.currentTolerance);
       return towards(1 + ((voltage / current) * change) / (voltage - earlierVoltage), settings.holdTolerance);
     },
   }),

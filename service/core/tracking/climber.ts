@@ -18,8 +18,18 @@ export function firstSight(): Seen {
 }
 
 /**
- * Lets a climber see, through its sensors, the mean current and power of a period it spent at `voltage` (V), decide,
- * and step. Returns the next voltage, V, inside the window.
+ * The power (W) that a converter's sensors make of an operating point: the product of their readings. Ripple makes the
+ * mean power differ from voltage times mean current; the readings keep that ratio.
+ */
+export function readPower({ converter }: Terminals, point: OperatingPoint): number {
+  const reading = readingOf(converter.voltageSensor, point.voltage) * readingOf(converter.currentSensor, point.current);
+  const apparent = point.voltage * point.current;
+  return apparent > 0 ? (reading * point.power) / apparent : reading;
+}
+
+/**
+ * Lets a climber see, through its sensors, the operating point of a period in which it asked for `voltage` (V), decide,
+ * and step from there. Returns the next voltage, V, inside the window.
  */
 export function climbOn(
   rule: ClimbingRule,
@@ -32,11 +42,9 @@ export function climbOn(
   seen.earlierVoltage = seen.voltage;
   seen.earlierCurrent = seen.current;
   seen.earlierPower = seen.power;
-  seen.voltage = readingOf(voltageSensor, voltage);
+  seen.voltage = readingOf(voltageSensor, point.voltage);
   seen.current = readingOf(currentSensor, point.current);
-  // Ripple makes the mean power differ from voltage times mean current: the readings keep that ratio.
-  const apparent = voltage * point.current;
-  seen.power = apparent > 0 ? (seen.voltage * seen.current * point.power) / apparent : seen.voltage * seen.current;
+  seen.power = readPower(terminals, point);
   seen.direction = rule.decide(seen);
   const wanted = voltage + seen.direction * rule.step;
   const next = terminals.clamp(wanted);

@@ -10,30 +10,36 @@ import type { Terminals } from "./terminals.ts";
 
 /** Start offsets averaged over, as shares of one step. */
 const STARTS = 64;
-/** Steps above its resting edge at which a climber's way down is joined: true sensors, and others. */
+/** Steps above its resting edge at which a climber's way down is joined: true sensors, wrong ones, rounding ones. */
 const MARGIN = 2;
 const SENSOR_MARGIN = 8;
+const ROUNDED_MARGIN = 512;
 /** Most control periods followed from one start. */
-const MOST_PERIODS = 192;
+const MOST_PERIODS = 1024;
 
 /**
  * Writes the mean operating point of a climber at rest in steady light: its own decisions, entered from open circuit
  * (or the window's upper edge), averaged over 64 start offsets of one step. What the rule sees goes through its sensors.
  *
  * The way down from open circuit is joined near the peak, on the lattice it would have reached. The orbit is averaged
- * over exactly one turn; one that does not close within 192 periods, over its last half. At most 64 x 192 evaluations.
+ * over exactly one turn; one that does not close within 1024 periods, over its last half. At most 64 x 1024 evaluations.
  */
 export function ownOrbit(terminals: Terminals, rule: ClimbingRule, mean: OperatingPoint): void {
   mean.voltage = mean.current = mean.power = 0;
   const top = terminals.clamp(conditionVoc(terminals.condition));
   const join = restingEdge(terminals, rule);
-  const { voltageSensor, currentSensor } = terminals.converter;
-  const margin = isExact(voltageSensor) && isExact(currentSensor) ? MARGIN : SENSOR_MARGIN;
+  const margin = marginOf(terminals);
   for (let start = 0; start < STARTS; start++) {
     const from = top - (start / STARTS) * rule.step;
     const skipped = Math.max(0, Math.floor((from - join) / rule.step) - margin);
     addOrbit(terminals, rule, from - skipped * rule.step, mean);
   }
+}
+
+/** Steps above its resting edge at which a climber's way down is joined: a rounded reading may stall it anywhere. */
+function marginOf({ converter: { voltageSensor, currentSensor } }: Terminals): number {
+  if (voltageSensor.resolution > 0 || currentSensor.resolution > 0) return ROUNDED_MARGIN;
+  return isExact(voltageSensor) && isExact(currentSensor) ? MARGIN : SENSOR_MARGIN;
 }
 
 /** The highest voltage (V) at which the rule may do other than go down: secant slope over current above -tolerance. */

@@ -2,7 +2,6 @@ import type { PhotovoltaicArray } from "../array/array.ts";
 import { conditionVoc, emptyCondition, enterCondition } from "../array/condition.ts";
 import type { PointTrace } from "../array/maximum-power-trace.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
-import { parabolicPeak } from "../numeric/parabolic-peak.ts";
 import type { ClimbingRule, Sampling, TargetRule, TrackingRule } from "../rules/rule.ts";
 import type { Cascade } from "./causes.ts";
 import type { Converter } from "./converter.ts";
@@ -97,6 +96,8 @@ function trackSample(
   }
   if (rule.behaviour === "target") holdTarget(rule, terminals, sample, cascade, point);
   else climb(rule, terminals, cascade, point);
+  // A mean of powers up to the best may come out above it by the rounding of its weights.
+  if (point.power > terminals.best && point.power < terminals.best * (1 + 1e-12)) point.power = terminals.best;
   cascade.operating = point.power;
   cascade.interrupted = interruptedShare(rule.sampling);
   if (terminals.available < terminals.converter.wakePower) sleep(terminals, cascade, point);
@@ -136,15 +137,8 @@ function holdTarget(
 }
 
 function climb(rule: ClimbingRule, terminals: Terminals, cascade: Cascade, point: OperatingPoint): void {
-  const { voltageSensor, currentSensor, rippleAmplitude } = terminals.converter;
+  const { voltageSensor, currentSensor } = terminals.converter;
   cascade.fresh = cascade.held = terminals.best;
-  if (rule.orbit === "own" || !isExact(voltageSensor) || !isExact(currentSensor)) {
-    ownOrbit(terminals, rule, point);
-    return;
-  }
-  let peak = terminals.bestVoltage;
-  if (rippleAmplitude > 0) {
-    peak = terminals.clamp(parabolicPeak((v) => terminals.ripplingPower(v), peak, 0.02 * peak));
-  }
-  threeLevelOrbit(terminals, peak, rule.step, point);
+  if (rule.orbit === "own" || !isExact(voltageSensor) || !isExact(currentSensor)) ownOrbit(terminals, rule, point);
+  else threeLevelOrbit(terminals, terminals.operatingPeak(), rule.step, point);
 }

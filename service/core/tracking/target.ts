@@ -1,6 +1,7 @@
 import { conditionIsc, conditionVoc } from "../array/condition.ts";
 import { voltageAtCurrent } from "../diode/junction-at-current.ts";
 import type { Sampling, TargetRule } from "../rules/rule.ts";
+import { readPower } from "./climber.ts";
 import { readingOf, valueReadAs } from "./converter.ts";
 import type { Terminals } from "./terminals.ts";
 
@@ -19,7 +20,7 @@ export function readSample(sampling: Sampling, terminals: Terminals): number {
 
 /** The voltage (V) of the highest power read at `points` voltages equally spaced over window and [0, Voc]. */
 function bestSwept(points: number, terminals: Terminals): number {
-  const { voltageSensor, currentSensor, trackingMinimumVoltage, trackingMaximumVoltage } = terminals.converter;
+  const { trackingMinimumVoltage, trackingMaximumVoltage } = terminals.converter;
   const low = Math.max(0, trackingMinimumVoltage);
   const high = Math.max(low, Math.min(trackingMaximumVoltage, conditionVoc(terminals.condition)));
   const point = { voltage: 0, current: 0, power: 0 };
@@ -28,7 +29,7 @@ function bestSwept(points: number, terminals: Terminals): number {
   for (let k = 0; k < points; k++) {
     const voltage = low + ((high - low) * k) / (points - 1);
     terminals.operate(voltage, point);
-    const power = readingOf(voltageSensor, voltage) * readingOf(currentSensor, point.current);
+    const power = readPower(terminals, point);
     if (power > bestPower) {
       best = voltage;
       bestPower = power;

@@ -4,8 +4,8 @@ import { currentAt, powerAt } from "../diode/current.ts";
 import { voltageAtCurrent } from "../diode/junction-at-current.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
 import { bracketedRoot } from "../numeric/bracketed-root.ts";
-import { GAUSS_16 } from "../numeric/gauss-legendre.ts";
 import type { Converter } from "./converter.ts";
+import { meanOverRipple, ripplePeak } from "./ripple.ts";
 
 /**
  * The converter's terminals in one weather: the array's power as the converter's limits leave it.
@@ -58,16 +58,32 @@ export class Terminals {
     return Math.min(this.converter.maximumPower, powerAt(circuit, Math.max(voltage, this.floor)));
   }
 
-  /** Power within the limits at a voltage, averaged over the ripple, W. */
-  ripplingPower(voltage: number): number {
-    if (this.converter.rippleAmplitude === 0) return this.power(voltage);
-    return this.rippling(voltage, { voltage: 0, current: 0, power: 0 }).power;
-  }
-
   /** Writes voltage, mean current and mean power at a voltage, ripple and limits included. */
   operate(voltage: number, point: OperatingPoint): void {
-    if (this.converter.rippleAmplitude > 0) this.rippling(voltage, point);
-    else this.operateWithoutRipple(voltage, point);
+    if (this.converter.rippleAmplitude === 0) {
+      this.operateWithoutRipple(voltage, point);
+      return;
+    }
+    this.ripple(voltage, point);
+    point.power = Math.min(this.converter.maximumPower, point.power);
+  }
+
+  /** Mean over the ripple around a voltage, before the power limit. */
+  private ripple(voltage: number, point: OperatingPoint): void {
+    const { floor, converter } = this;
+    meanOverRipple(
+      this.condition,
+      { centre: Math.max(voltage, floor), amplitude: converter.rippleAmplitude, floor },
+      point,
+    );
+  }
+
+  /** Where the mean power over the ripple peaks inside the window, V; without ripple the best voltage. */
+  operatingPeak(): number {
+    const { rippleAmplitude } = this.converter;
+    return rippleAmplitude === 0
+      ? this.bestVoltage
+      : this.clamp(ripplePeak(this.condition, rippleAmplitude, this.floor));
   }
 
   /** Writes voltage, current and power at a voltage, limits included. */
@@ -88,42 +104,26 @@ export class Terminals {
     point.current = maximumPower / point.voltage;
   }
 
-  /**
-   * Mean of the curve over v (1 + r sin phi), exact to quadrature: 16 Gauss points in phi over the half cycle, which
-   * the other half repeats; where the swing passes open circuit the points end there, since beyond it there is nothing.
-   */
-  private rippling(voltage: number, point: OperatingPoint): OperatingPoint {
-    const { circuit } = this.condition;
-    const r = this.converter.rippleAmplitude;
-    const centre = Math.max(voltage, this.floor);
-    const reach = centre > 0 ? (conditionVoc(this.condition) / centre - 1) / r : 1;
-    const end = reach >= 1 ? Math.PI / 2 : Math.asin(Math.max(-1, reach));
-    const half = (end + Math.PI / 2) / 2;
-    let power = 0;
-    let current = 0;
-    for (let k = 0; k < GAUSS_16.nodes.length; k++) {
-      const at = centre * (1 + r * Math.sin(-Math.PI / 2 + half * (1 + GAUSS_16.nodes[k])));
-      const amperes = Math.max(0, currentAt(circuit, at));
-      current += GAUSS_16.weights[k] * amperes;
-      power += GAUSS_16.weights[k] * amperes * at;
-    }
-    const share = (2 * half) / Math.PI;
-    point.voltage = centre;
-    point.current = current * share;
-    point.power = Math.min(this.converter.maximumPower, power * share);
-    return point;
+  /** Voltages where the operating power, ripple and limits included, has a corner, V. */
+  corners(): number[] {
+    const { trackingMinimumVoltage, trackingMaximumVoltage, rippleAmplitude: r } = this.converter;
+    const voc = conditionVoc(this.condition);
+    const corners = [trackingMinimumVoltage, trackingMaximumVoltage, this.floor, ...this.limitCrossings(voc)];
+    return [...corners, this.floor / (1 - r), voc / (1 + r), voc / (1 - r)];
   }
 
-  /** Voltages where the power curve within window and limits has a corner, V. */
-  corners(): number[] {
-    const { trackingMinimumVoltage, trackingMaximumVoltage, maximumPower } = this.converter;
-    const { circuit, maximum } = this.condition;
-    const voc = conditionVoc(this.condition);
-    const corners = [trackingMinimumVoltage, trackingMaximumVoltage, this.floor, voc];
-    if (maximum.power > maximumPower) {
-      const excess = (voltage: number): number => powerAt(circuit, voltage) - maximumPower;
-      corners.push(bracketedRoot(excess, 0, maximum.voltage), bracketedRoot(excess, maximum.voltage, voc));
-    }
-    return corners;
+  /** Voltages at which the mean power passes the power limit; none where it stays below. */
+  private limitCrossings(voc: number): number[] {
+    const { maximumPower, rippleAmplitude } = this.converter;
+    if (this.condition.maximum.power <= maximumPower) return [];
+    const point = { voltage: 0, current: 0, power: 0 };
+    const excess = (voltage: number): number => {
+      if (rippleAmplitude === 0) return powerAt(this.condition.circuit, voltage) - maximumPower;
+      this.ripple(voltage, point);
+      return point.power - maximumPower;
+    };
+    const peak = Math.max(this.floor, ripplePeak(this.condition, rippleAmplitude, this.floor));
+    const end = voc / (1 - rippleAmplitude);
+    return [bracketedRoot(excess, 0, peak), bracketedRoot(excess, peak, end)].filter((root) => !Number.isNaN(root));
   }
 }
