@@ -21,6 +21,7 @@ async function demo(): Promise<void> {
       rows.push({ stage, answer: await compareStage(client, stage, index + 1) });
     }
     progress("");
+    say("Energy a year that the roof could give, and what each rule leaves of it, kWh:\n");
     say(table(rows));
     say(`\nA better converter (perturb & observe in place of constant voltage) is worth most at:\n${worth(rows, 3)}`);
     const cautions = new Map(rows.flatMap(({ answer }) => answer.cautions.map((caution) => [caution.code, caution])));

@@ -17,13 +17,13 @@ const CAUSE_WORDS: Record<string, string> = {
   interruption: "interruption",
 };
 
-/** The table: a row a landing stage, available energy, lost energy of each rule, the cheapest rule's largest cause. */
+/** The table: a row a landing stage; available energy and what each rule loses, kWh a year; the largest cause. */
 export function table(rows: readonly StageAnswer[]): string {
   const head = [
     "landing stage",
     "feeds",
-    "available kWh",
-    ...CANDIDATES.map(({ label }) => `${label}: lost kWh`),
+    "available",
+    ...CANDIDATES.map(({ label }) => label),
     "largest cause",
   ];
   const body = rows.map(({ stage, answer }) => [

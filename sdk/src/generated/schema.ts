@@ -1,0 +1,2752 @@
+// generated from openapi/openapi.json by sdk/scripts/generate.ts: do not edit
+import type { Column } from "../columns.ts";
+
+export interface paths {
+    "/health/live": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Is the process alive
+         * @description Answers as long as the process can answer at all, while draining too.
+         */
+        get: operations["liveness"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/health/ready": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * May requests be sent here
+         * @description True once the workers are warm, false as soon as the service is told to stop.
+         */
+        get: operations["readiness"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/openapi.json": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Read this document
+         * @description The OpenAPI 3.1 document of this version.
+         */
+        get: operations["document"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/v1/comparisons": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Compare tracking rules and converters
+         * @description 2 to 24 candidates on one array over one climate: what each delivers, its difference to the baseline and to the best, and what the difference is worth per year. Worth and payback need energyValue and a climate of 365 or 366 days.
+         */
+        post: operations["compare"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/v1/estimates": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Estimate what a tracking rule loses
+         * @description One module, one array, one rule on a converter, one climate: available, delivered and lost energy, the loss by cause, by month and by irradiance, and what each sample did. Only module, rule and climate are required.
+         */
+        post: operations["estimate"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/v1/rules": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * List the tracking rules
+         * @description Every tracking rule with its parameters, defaults, ranges, usual ranges and their sources.
+         */
+        get: operations["rules"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/version": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Name the version and the limits in force
+         * @description The service's version and the limits in force: at most this document's ceilings, which the example shows.
+         */
+        get: operations["version"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+}
+export type webhooks = Record<string, never>;
+export interface components {
+    schemas: {
+        /** @description Temperature of the air, and how the cells follow it (`model`: faiman with its defaults when left out). */
+        AmbientTemperature: {
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "ambient";
+            model?: components["schemas"]["CellTemperatureModel"];
+            /** @description Temperature of the air. Unit: degC. */
+            values: Column;
+            /** @description Wind speed; left out, 1 m/s is taken and a caution says so. Unit: m/s. */
+            windSpeed?: Column;
+        };
+        /** @description Modules in series and in parallel, and the wiring to the converter. */
+        ArrayLayout: {
+            /**
+             * @description Modules in series in each string. Unit: 1.
+             * @default 1
+             */
+            modulesInSeries?: number;
+            /**
+             * @description Strings in parallel. Unit: 1.
+             * @default 1
+             */
+            stringsInParallel?: number;
+            /**
+             * @description Resistance between array and converter, of the whole array. Unit: ohm.
+             * @default 0
+             */
+            wiringResistance?: number;
+        };
+        /**
+         * Battery-coupled
+         * @description No tracking: the array works at the battery's voltage plus the drop of the path. A full battery is not modelled.
+         */
+        BatteryCoupledRule: {
+            /** @description Battery voltage at the converter's terminals: one value, or one a sample of the climate. Source: common practice, no source. Unit: V. */
+            batteryVoltage: number | Column;
+            /**
+             * @description Time between two decisions of the rule. Usual: 0.02 to 1. Source: common practice, no source. Unit: s.
+             * @default 1
+             */
+            controlPeriod?: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "battery-coupled";
+            /**
+             * @description Voltage drop between the array's terminals and the battery (blocking diode, switch, fuse). Usual: 0 to 1. Source: common practice, no source. Unit: V.
+             * @default 0
+             */
+            pathDrop?: number;
+            /**
+             * @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Usual: 0 to 0.02. Source: common practice, no source. Unit: 1, of the open-circuit voltage at standard test conditions.
+             * @default 0
+             */
+            stepFraction?: number;
+        };
+        /** @description One rule on one converter under a name; without a converter it has that of the request. */
+        Candidate: {
+            converter?: components["schemas"]["Converter"];
+            /**
+             * @description Name of the candidate in the answer: 1 to 100 characters, each name once.
+             * @example hold a fraction
+             */
+            label: string;
+            /** @description Price of this candidate's converter. Unit: the currency of energyValue. */
+            price?: number;
+            rule: components["schemas"]["Rule"];
+        };
+        /** @description Lost energy of each sample by cause. */
+        CauseTrace: {
+            /** @description The reference is stale: held from the last sample. Unit: kWh. */
+            heldSample?: (number | null)[];
+            /** @description Nothing is delivered while sampling, sweeping or asleep. Unit: kWh. */
+            interruption?: (number | null)[];
+            /** @description Steps, hunting and ripple around the target. Unit: kWh. */
+            regulation?: (number | null)[];
+            /** @description The rule's own target misses the maximum. Unit: kWh. */
+            setPoint?: (number | null)[];
+            /** @description The maximum lies outside the converter's voltage window. Unit: kWh. */
+            voltageWindow?: (number | null)[];
+            /** @description The rule sits on a lower peak of the power curve. Unit: kWh. */
+            wrongPeak?: (number | null)[];
+        };
+        /** @description Something to know before acting on the figures. */
+        Caution: {
+            code: string;
+            /** @description What to know before acting on the figures. */
+            detail: string;
+            /** @description info, warning or danger. */
+            severity: string;
+            values: {
+                [key: string]: number;
+            };
+        };
+        /** @description Cell temperature, measured or computed elsewhere. */
+        CellTemperature: {
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "cell";
+            /** @description Cell temperature. Unit: degC. */
+            values: Column;
+        };
+        /** @description How the cell temperature follows from irradiance, air and wind. */
+        CellTemperatureModel: components["schemas"]["FaimanModel"] | components["schemas"]["NoctModel"] | components["schemas"]["KingModel"];
+        /** @description Null for the test generator, whose formula is its own. */
+        Circuit: {
+            /** @description Band gap of the cells at 25 degC. Unit: eV. */
+            bandgap: number;
+            /** @description Relative change of the band gap with temperature. Unit: 1/K. */
+            bandgapCoefficient: number;
+            /** @description Cells in series inside the module. Unit: 1. */
+            cellsInSeries: number;
+            /** @description n Ns k T/q of the whole module at 25 degC. Unit: V. */
+            idealityVoltage: number;
+            /** @description Always single-diode: the circuit is a module that can be sent back. */
+            kind: string;
+            /** @description Photocurrent at standard test conditions. Unit: A. */
+            photocurrent: number;
+            /** @description Change of the photocurrent with temperature. Unit: %/K. */
+            photocurrentCoefficient: number;
+            /** @description Saturation current of the diode at 25 degC. Unit: A. */
+            saturationCurrent: number;
+            /** @description Series resistance of the module. Unit: ohm. */
+            seriesResistance: number;
+            /** @description Shunt resistance at 1000 W/m2; null: infinite. Unit: ohm. */
+            shuntResistance: number | null;
+        } | null;
+        /** @description Equally spaced samples of irradiance and temperature; columns of equal length. */
+        Climate: {
+            /**
+             * @description What happens to missing samples (null): the request is refused, or they are left out.
+             * @default refuse
+             * @enum {string}
+             */
+            gaps?: "refuse" | "skip";
+            irradiance: components["schemas"]["Irradiance"];
+            /**
+             * @description Start of the first sample, ISO 8601 with offset from UTC; months follow this clock.
+             * @example 2025-01-01T00:00:00+01:00
+             */
+            start: string;
+            /** @description Time from one sample to the next. Unit: s. */
+            step: number;
+            temperature: components["schemas"]["Temperature"];
+            /**
+             * @description A sample is the mean over its step, or the value at its start.
+             * @default mean
+             * @enum {string}
+             */
+            timing?: "mean" | "instant";
+        };
+        /** @description One candidate's figures beside the baseline's and the best one's. */
+        ComparedCandidate: {
+            /** @description Delivered more than the baseline. Unit: kWh. */
+            differenceToBaseline: number;
+            /** @description Delivered against the best candidate: 0 or below. Unit: kWh. */
+            differenceToBest: number;
+            energy: components["schemas"]["Energy"];
+            label: string;
+            lostByCause: components["schemas"]["LostByCause"];
+            /** @description In which the worth pays the price above the baseline's; null where there is none. Unit: years. */
+            payback: number | null;
+            /** @description From 1, by delivered energy; equals share a rank. Unit: 1. */
+            rank: number;
+            /** @description Of the difference to the baseline. Unit: the currency of energyValue. */
+            worthPerYear: number | null;
+            /** @description Why no worth per year can be said; null when it can. */
+            worthReason: string | null;
+        };
+        /** @description What each candidate delivers, and what the difference is worth. */
+        ComparisonAnswer: {
+            cautions: components["schemas"]["Caution"][];
+            coverage: components["schemas"]["Coverage"];
+            module: components["schemas"]["ModuleAnswer"];
+            provenance: components["schemas"]["Provenance"];
+            resolved: components["schemas"]["ResolvedComparison"];
+            /** @description In the order of the request. */
+            results: components["schemas"]["ComparedCandidate"][];
+        };
+        /** @description Several rules and converters on one array over one climate. */
+        ComparisonRequest: {
+            array?: components["schemas"]["ArrayLayout"];
+            /**
+             * @description Label of the candidate the others are compared with; left out: the first.
+             * @example hold a fraction
+             */
+            baseline?: string;
+            /** @description 2 to 24 rules on converters; `converter` above holds for those without their own. */
+            candidates: components["schemas"]["Candidate"][];
+            climate: components["schemas"]["Climate"];
+            converter?: components["schemas"]["Converter"];
+            energyValue?: components["schemas"]["EnergyValue"];
+            /**
+             * @description steady: each sample at rest. stepped: every rule at its own control period. auto: stepped up to a step of 300 s, steady above; the answer says which and why.
+             * @default auto
+             * @enum {string}
+             */
+            mode?: "auto" | "steady" | "stepped";
+            module: components["schemas"]["Module"];
+            /**
+             * @description Coldest temperature on record at the site, for the caution; null: not known. Unit: degC.
+             * @default null
+             */
+            recordLowTemperature?: number | null;
+        };
+        /**
+         * Constant voltage
+         * @description Holds one voltage per module, set once, in all weather.
+         */
+        ConstantVoltageRule: {
+            /**
+             * @description Time between two decisions of the rule. Usual: 0.02 to 1. Source: common practice, no source. Unit: s.
+             * @default 1
+             */
+            controlPeriod?: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "constant-voltage";
+            /** @description Voltage held, per module in series. Default: maximum power voltage of the module at standard test conditions. Source: common practice, no source. Unit: V. */
+            setVoltagePerModule?: number;
+            /**
+             * @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Usual: 0 to 0.02. Source: common practice, no source. Unit: 1, of the open-circuit voltage at standard test conditions.
+             * @default 0
+             */
+            stepFraction?: number;
+        };
+        /** @description What limits the rule: voltage window, limits, ripple and sensors. */
+        Converter: {
+            /**
+             * @description Highest voltage the input bears, for the caution only; null: not known. Unit: V.
+             * @default null
+             */
+            inputVoltageRating?: number | null;
+            /**
+             * @description Most the input takes; null: no limit. Unit: A.
+             * @default null
+             */
+            maximumCurrent?: number | null;
+            /**
+             * @description Most the input takes; null: no limit. Unit: W.
+             * @default null
+             */
+            maximumPower?: number | null;
+            resolution?: components["schemas"]["SensorResolution"];
+            /**
+             * @description Amplitude of the voltage ripple. Unit: 1, of the voltage.
+             * @default 0
+             */
+            rippleAmplitude?: number;
+            sensorError?: components["schemas"]["SensorError"];
+            /**
+             * @description Upper end of the voltage window; null: none. Unit: V.
+             * @default null
+             */
+            trackingMaximumVoltage?: number | null;
+            /**
+             * @description Lower end of the voltage window. Unit: V.
+             * @default 0
+             */
+            trackingMinimumVoltage?: number;
+            /**
+             * @description Asleep while the array could give less. Unit: W.
+             * @default 0
+             */
+            wakePower?: number;
+        };
+        /** @description How many samples counted. */
+        Coverage: {
+            /** @description Samples of the climate. Unit: 1. */
+            samples: number;
+            /** @description Missing samples, left out of every sum. Unit: 1. */
+            skipped: number;
+            /** @description Samples that count. Unit: 1. */
+            used: number;
+        };
+        /** @description A module as its datasheet prints it, at 1000 W/m2 and 25 degC. */
+        DatasheetModule: {
+            /**
+             * @description Band gap of the cells at 25 degC; silicon by default. Unit: eV.
+             * @default 1.121
+             */
+            bandgap?: number;
+            /**
+             * @description Relative change of the band gap with temperature; silicon by default. Unit: 1/K.
+             * @default -0.0002677
+             */
+            bandgapCoefficient?: number;
+            /** @description Cells in series inside the module. Unit: 1. */
+            cellsInSeries: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "datasheet";
+            /** @description Current at maximum power, below the short-circuit current. Unit: A. */
+            maximumPowerCurrent: number;
+            /** @description Voltage at maximum power, below the open-circuit voltage. Unit: V. */
+            maximumPowerVoltage: number;
+            /** @description Open-circuit voltage at standard test conditions. Unit: V. */
+            openCircuitVoltage: number;
+            /** @description Change of the open-circuit voltage with temperature. Unit: %/K. */
+            openCircuitVoltageCoefficient: number;
+            /** @description Short-circuit current at standard test conditions. Unit: A. */
+            shortCircuitCurrent: number;
+            /** @description Change of the short-circuit current with temperature. Unit: %/K. */
+            shortCircuitCurrentCoefficient: number;
+        };
+        /** @description Energies over the whole climate. */
+        Energy: {
+            /** @description What the array could have given, within the converter's power and current limits. Unit: kWh. */
+            available: number;
+            /** @description Above the converter's power and current limits; in none of the other figures. Unit: kWh. */
+            clipped: number;
+            /** @description What the rule took: available minus lost. Unit: kWh. */
+            delivered: number;
+            /** @description On the plane of the modules. Unit: kWh/m2. */
+            insolation: number;
+            /** @description The sum of the six causes. Unit: kWh. */
+            lost: number;
+            /** @description Lost over available; null when nothing was available. Unit: 1. */
+            lostFraction: number | null;
+            /** @description Delivered over available; null when nothing was available. Unit: 1. */
+            trackingEfficiency: number | null;
+        };
+        /** @description What a kilowatt-hour is worth. */
+        EnergyValue: {
+            /**
+             * @description ISO 4217 code.
+             * @example EUR
+             */
+            currency: string;
+            /** @description Worth of a delivered kilowatt-hour. Unit: the currency per kWh. */
+            perKilowattHour: number;
+        };
+        /** @description Energy, its loss by cause, and where it was lost. */
+        EstimateAnswer: {
+            cautions: components["schemas"]["Caution"][];
+            coverage: components["schemas"]["Coverage"];
+            energy: components["schemas"]["Energy"];
+            /** @description Every class that has samples. */
+            irradianceClasses: components["schemas"]["IrradianceClass"][];
+            lostByCause: components["schemas"]["LostByCause"];
+            module: components["schemas"]["ModuleAnswer"];
+            /** @description Every month the climate touches. */
+            months: components["schemas"]["Month"][];
+            provenance: components["schemas"]["Provenance"];
+            resolved: components["schemas"]["ResolvedEstimate"];
+            traces: components["schemas"]["Traces"];
+        };
+        /** @description One module, one array, one rule on a converter, one climate. */
+        EstimateRequest: {
+            array?: components["schemas"]["ArrayLayout"];
+            climate: components["schemas"]["Climate"];
+            converter?: components["schemas"]["Converter"];
+            /**
+             * @description steady: each sample at rest. stepped: every rule at its own control period. auto: stepped up to a step of 300 s, steady above; the answer says which and why.
+             * @default auto
+             * @enum {string}
+             */
+            mode?: "auto" | "steady" | "stepped";
+            module: components["schemas"]["Module"];
+            /**
+             * @description Coldest temperature on record at the site, for the caution; null: not known. Unit: degC.
+             * @default null
+             */
+            recordLowTemperature?: number | null;
+            rule: components["schemas"]["Rule"];
+            /**
+             * @description Decimals of the traces. Unit: 1.
+             * @default 3
+             */
+            traceDecimals?: number;
+            /**
+             * @description Columns of the answer: voltage, current and power; powers; lost energy by cause; none.
+             * @default full
+             * @enum {string}
+             */
+            traces?: "full" | "power" | "causes" | "none";
+        };
+        /** @description Faiman, Prog. Photovolt. 16 (2008) 307-315: t = ta + G/(U0 + U1 w). */
+        FaimanModel: {
+            /**
+             * @description Heat loss of the modules in still air. Unit: W/(m2 K).
+             * @default 25
+             */
+            heatLoss?: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "faiman";
+            /**
+             * @description Heat loss that each m/s of wind adds. Unit: W s/(m3 K).
+             * @default 6.84
+             */
+            windHeatLoss?: number;
+        };
+        /**
+         * Fractional open-circuit voltage
+         * @description Disconnects the array each sample period, reads its open-circuit voltage and holds a fraction of it until the next sample.
+         */
+        FractionalOpenCircuitVoltageRule: {
+            /**
+             * @description Time between two decisions of the rule. Usual: 0.02 to 1. Source: common practice, no source. Unit: s.
+             * @default 1
+             */
+            controlPeriod?: number;
+            /**
+             * @description Share of the open-circuit voltage that is held. Usual: 0.7 to 0.8. Source: default: Enslin et al. 1997 (from memory); usual range: common practice, no source. Unit: 1, of the sampled open-circuit voltage.
+             * @default 0.76
+             */
+            fraction?: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "fractional-open-circuit-voltage";
+            /**
+             * @description Reads a pilot cell of its own, fresh at each decision, instead of interrupting the array. Source: common practice, no source.
+             * @default false
+             */
+            pilotCell?: boolean;
+            /**
+             * @description How long one sample interrupts the power; shorter than the sample period. Usual: 0.001 to 1. Source: common practice, no source. Unit: s.
+             * @default 0.256
+             */
+            sampleDuration?: number;
+            /**
+             * @description Time from the start of one sample to the start of the next. Usual: 1 to 600. Source: common practice, no source. Unit: s.
+             * @default 16
+             */
+            samplePeriod?: number;
+            /**
+             * @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Usual: 0 to 0.02. Source: common practice, no source. Unit: 1, of the open-circuit voltage at standard test conditions.
+             * @default 0
+             */
+            stepFraction?: number;
+        };
+        /** @description What the service says of itself. */
+        Health: {
+            /** @description live or ready. */
+            status: string;
+        };
+        /**
+         * Incremental conductance
+         * @description Compares dI/dV with -I/V, whose equality marks the peak; rests inside a tolerance and wakes when the current moves.
+         */
+        IncrementalConductanceRule: {
+            /**
+             * @description Time between two decisions of the rule. Usual: 0.02 to 1. Source: common practice, no source. Unit: s.
+             * @default 0.1
+             */
+            controlPeriod?: number;
+            /**
+             * @description Relative change of the current that wakes a resting rule. Source: own choice: the resolution of a common current sensor. Unit: 1, of the current.
+             * @default 0.001
+             */
+            currentTolerance?: number;
+            /** @description Relative slope of the power curve below which the rule rests; 0 never rests. Default: 10 times stepFraction. Source: own choice: the slope that one step makes on a crystalline silicon curve. Unit: 1, of the relative slope 1 + (V/I) dI/dV. */
+            holdTolerance?: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "incremental-conductance";
+            /**
+             * @description Step of the array voltage at each decision. Usual: 0.002 to 0.03. Source: common practice, no source. Unit: 1, of the open-circuit voltage at standard test conditions.
+             * @default 0.01
+             */
+            stepFraction?: number;
+        };
+        /** @description The light of a climate. */
+        Irradiance: components["schemas"]["PlaneOfArrayIrradiance"];
+        /** @description The samples of one class of irradiance. */
+        IrradianceClass: {
+            /** @description What the array could have given. Unit: kWh. */
+            available: number;
+            /** @description Lower end, inside the class. Unit: W/m2. */
+            from: number;
+            /** @description Time in the class. Unit: h. */
+            hours: number;
+            /** @description What was left. Unit: kWh. */
+            lost: number;
+            /** @description Upper end, outside the class; the last class has all above. Unit: W/m2. */
+            to: number;
+        };
+        /** @description King et al. 2004, SAND2004-3535, eqs. 11 and 12, for one of its five mounts. */
+        KingModel: {
+            /**
+             * @description The back of the modules.
+             * @enum {string}
+             */
+            backing: "glass" | "polymer" | "thin-film-steel";
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "king";
+            /**
+             * @description How they stand. Measured: glass on open-rack and close-roof, polymer on open-rack and insulated-back, thin-film-steel on open-rack.
+             * @enum {string}
+             */
+            place: "open-rack" | "close-roof" | "insulated-back";
+        };
+        /** @description At most the ceilings of this document; the operator may lower them. */
+        LimitsInForce: {
+            /** @description Longest request body, decompressed. Unit: byte. */
+            bodyBytes: number;
+            /** @description Most candidates of a comparison. Unit: 1. */
+            candidates: number;
+            /** @description Longest computing of one request. Unit: s. */
+            computeSeconds: number;
+            /** @description Most control periods of all candidates together, or as much other work. Unit: 1. */
+            controlPeriods: number;
+            /** @description Most samples of a climate. Unit: 1. */
+            samples: number;
+        };
+        /** @description Lost energy by cause; the six add up to what is lost. One may be negative. */
+        LostByCause: {
+            /** @description The reference is stale: held from the last sample. Unit: kWh. */
+            heldSample: number;
+            /** @description Nothing is delivered while sampling, sweeping or asleep. Unit: kWh. */
+            interruption: number;
+            /** @description Steps, hunting and ripple around the target. Unit: kWh. */
+            regulation: number;
+            /** @description The rule's own target misses the maximum. Unit: kWh. */
+            setPoint: number;
+            /** @description The maximum lies outside the converter's voltage window. Unit: kWh. */
+            voltageWindow: number;
+            /** @description The rule sits on a lower peak of the power curve. Unit: kWh. */
+            wrongPeak: number;
+        };
+        /** @description Null where no datasheet was fitted. */
+        Misfits: {
+            /** @description Relative misfit of the current at Vmp. Unit: 1. */
+            maximumPowerCurrent: number;
+            /** @description Slope of the power curve at Vmp over Imp; 0 at a maximum. Unit: 1. */
+            maximumPowerSlope: number;
+            /** @description Relative misfit of Voc. Unit: 1. */
+            openCircuitVoltage: number;
+            /** @description Relative misfit of the change of Voc over 10 K. Unit: 1. */
+            openCircuitVoltageCoefficient: number;
+            /** @description Relative misfit of Isc. Unit: 1. */
+            shortCircuitCurrent: number;
+        } | null;
+        /** @description A model the figures rest on. */
+        Model: {
+            name: string;
+            source: string;
+            /** @description Raised when the model's figures change. */
+            version: string;
+        };
+        /** @description One photovoltaic module. */
+        Module: components["schemas"]["DatasheetModule"] | components["schemas"]["SingleDiodeModule"] | components["schemas"]["TestGeneratorModule"];
+        /** @description How the module was understood. */
+        ModuleAnswer: {
+            circuit: components["schemas"]["Circuit"];
+            /** @description exact, nearest (within 2 % of every condition), or given. */
+            fit: string;
+            misfits: components["schemas"]["Misfits"];
+        };
+        /** @description One calendar month. */
+        Month: {
+            /** @description What the array could have given. Unit: kWh. */
+            available: number;
+            /** @description What the rule took. Unit: kWh. */
+            delivered: number;
+            /** @description The difference. Unit: kWh. */
+            lost: number;
+            lostByCause: components["schemas"]["LostByCause"];
+            /**
+             * @description Year and month by the clock of the climate's start.
+             * @example 2025-01
+             */
+            month: string;
+        };
+        /** @description Nominal operating cell temperature: t = ta + (NOCT - 20)/800 G, in any wind. */
+        NoctModel: {
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "noct";
+            /** @description Cell temperature at 800 W/m2, 20 degC and 1 m/s. Unit: degC. */
+            nominalOperatingCellTemperature: number;
+        };
+        /**
+         * Perfect tracking
+         * @description The maximum of the power curve inside the converter's voltage window, without ripple, sensor error or waiting. Loses only what the window costs.
+         */
+        PerfectRule: {
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "perfect";
+        };
+        /**
+         * Perturb and observe
+         * @description Steps the voltage at each decision and turns when the power fell. Never rests; moving light can mislead it.
+         */
+        PerturbAndObserveRule: {
+            /**
+             * @description Time between two decisions of the rule. Usual: 0.02 to 1. Source: common practice, no source. Unit: s.
+             * @default 0.1
+             */
+            controlPeriod?: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "perturb-and-observe";
+            /**
+             * @description Step of the array voltage at each decision. Usual: 0.002 to 0.03. Source: common practice, no source. Unit: 1, of the open-circuit voltage at standard test conditions.
+             * @default 0.01
+             */
+            stepFraction?: number;
+        };
+        /** @description Irradiance on the tilted plane of the modules. */
+        PlaneOfArrayIrradiance: {
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "plane-of-array";
+            /** @description Irradiance on the plane of the modules; readings down to -10 at night count as 0. Unit: W/m2. */
+            values: Column;
+        };
+        /** @description One operating point a sample; voltage and current only in full traces. */
+        PointTrace: {
+            /** @description Current, mean over the sample. Unit: A. */
+            current?: (number | null)[];
+            /** @description Power, mean over the sample, interruptions counted. Unit: W. */
+            power?: (number | null)[];
+            /** @description Voltage at the converter's terminals. Unit: V. */
+            voltage?: (number | null)[];
+        };
+        /**
+         * Power curve scan
+         * @description Sweeps the whole window each scan period, nothing delivered meanwhile, then holds the best voltage or climbs from it.
+         */
+        PowerCurveScanRule: {
+            /**
+             * @description What follows a sweep: climb from the best voltage by comparing powers, or hold it. Source: common practice, no source.
+             * @default climb
+             * @enum {string}
+             */
+            afterwards?: "climb" | "hold";
+            /**
+             * @description Time between two decisions of the rule. Usual: 0.02 to 1. Source: common practice, no source. Unit: s.
+             * @default 0.1
+             */
+            controlPeriod?: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "power-curve-scan";
+            /**
+             * @description Voltages tried in one sweep, equally spaced over the window inside 0 V to open circuit. Usual: 50 to 200. Source: common practice, no source. Unit: 1.
+             * @default 100
+             */
+            points?: number;
+            /**
+             * @description Time from the start of one sweep to the start of the next. Usual: 60 to 3600. Source: common practice, no source. Unit: s.
+             * @default 600
+             */
+            scanPeriod?: number;
+            /**
+             * @description Step of the array voltage at each decision. Usual: 0.002 to 0.03. Source: common practice, no source. Unit: 1, of the open-circuit voltage at standard test conditions.
+             * @default 0.01
+             */
+            stepFraction?: number;
+            /**
+             * @description How long one sweep takes, nothing being delivered: an upper bound of its cost. Shorter than the scan period. Usual: 0.1 to 5. Source: common practice, no source. Unit: s.
+             * @default 2
+             */
+            sweepDuration?: number;
+        };
+        /** @description Why there is no answer, and what to change (RFC 9457). */
+        Problem: {
+            /** @description One of: malformed-body, malformed-request, unauthorized, not-found, method-not-allowed, not-acceptable, too-slow, body-too-large, unsupported-media-type, invalid-request, too-much-work, time-limit-exceeded, headers-too-large, internal, worker-lost, overloaded, draining, warming; more may come, none changes its meaning. */
+            code: string;
+            detail: string;
+            /** @description How many errors there are. Unit: 1. */
+            errorCount: number;
+            /** @description The first 20 of them. */
+            errors: components["schemas"]["ProblemError"][];
+            /** @description As in the x-request-id header; finds the request in the log. */
+            requestId: string;
+            /** @description The HTTP status. Unit: 1. */
+            status: number;
+            title: string;
+            /** @description urn:kneegap:problem: and the code. */
+            type: string;
+        };
+        /** @description One thing to change in the request. */
+        ProblemError: {
+            /** @description What kind of error this is. */
+            code: string;
+            /** @description What is wrong and what to change. */
+            detail: string;
+            /** @description What would be right, where that can be said. */
+            expected?: string;
+            /**
+             * @description JSON pointer (RFC 6901) into the request.
+             * @example /climate/step
+             */
+            pointer: string;
+        };
+        /** @description What the figures rest on. */
+        Provenance: {
+            /** @description SHA-256 of the resolved request without presentation members: JSON with sorted keys and no spaces, in which each column stands as [n] followed by n little-endian doubles. */
+            inputDigest: string;
+            models: components["schemas"]["Model"][];
+            /** @description Of the service that computed the answer. */
+            version: string;
+        };
+        /** @description The array as it was computed, every default filled in. */
+        ResolvedArrayLayout: {
+            /** @description Modules in series in each string. Unit: 1. */
+            modulesInSeries: number;
+            /** @description Strings in parallel. Unit: 1. */
+            stringsInParallel: number;
+            /** @description Resistance between array and converter. Unit: ohm. */
+            wiringResistance: number;
+        };
+        /** @description Battery-coupled, every default filled in. */
+        ResolvedBatteryCoupledRule: {
+            /** @description Battery voltage at the converter's terminals: one value, or one a sample of the climate. Null where one value a sample was sent. Unit: V. */
+            batteryVoltage: number | null;
+            /** @description Time between two decisions of the rule. Unit: s. */
+            controlPeriod: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "battery-coupled";
+            /** @description Voltage drop between the array's terminals and the battery (blocking diode, switch, fuse). Unit: V. */
+            pathDrop: number;
+            /** @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Unit: 1, of the open-circuit voltage at standard test conditions. */
+            stepFraction: number;
+        };
+        /** @description A candidate as it was computed, every default filled in. */
+        ResolvedCandidate: {
+            converter: components["schemas"]["ResolvedConverter"];
+            label: string;
+            /** @description Price of this candidate's converter; null: not given. Unit: the currency of energyValue. */
+            price: number | null;
+            rule: components["schemas"]["ResolvedRule"];
+        };
+        /** @description What was computed, every default filled in. */
+        ResolvedComparison: {
+            array: components["schemas"]["ResolvedArrayLayout"];
+            /** @description Label of the candidate the others are compared with. */
+            baseline: string;
+            candidates: components["schemas"]["ResolvedCandidate"][];
+            energyValue: components["schemas"]["ResolvedEnergyValue"];
+            mode: string;
+            modeReason: string;
+        };
+        /** @description Constant voltage, every default filled in. */
+        ResolvedConstantVoltageRule: {
+            /** @description Time between two decisions of the rule. Unit: s. */
+            controlPeriod: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "constant-voltage";
+            /** @description Voltage held, per module in series. Unit: V. */
+            setVoltagePerModule: number;
+            /** @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Unit: 1, of the open-circuit voltage at standard test conditions. */
+            stepFraction: number;
+        };
+        /** @description The converter as it was computed, every default filled in. */
+        ResolvedConverter: {
+            /** @description Highest voltage the input bears; null: not known. Unit: V. */
+            inputVoltageRating: number | null;
+            /** @description Most the input takes; null: no limit. Unit: A. */
+            maximumCurrent: number | null;
+            /** @description Most the input takes; null: no limit. Unit: W. */
+            maximumPower: number | null;
+            resolution: components["schemas"]["ResolvedSensorResolution"];
+            /** @description Amplitude of the voltage ripple over the voltage. Unit: 1. */
+            rippleAmplitude: number;
+            sensorError: components["schemas"]["ResolvedSensorError"];
+            /** @description Upper end of the voltage window; null: none. Unit: V. */
+            trackingMaximumVoltage: number | null;
+            /** @description Lower end of the voltage window. Unit: V. */
+            trackingMinimumVoltage: number;
+            /** @description Asleep while the array could give less. Unit: W. */
+            wakePower: number;
+        };
+        /** @description Null when not given. */
+        ResolvedEnergyValue: {
+            currency: string;
+            /** @description As it was sent. Unit: the currency per kWh. */
+            perKilowattHour: number;
+        } | null;
+        /** @description What was computed, every default filled in. */
+        ResolvedEstimate: {
+            array: components["schemas"]["ResolvedArrayLayout"];
+            converter: components["schemas"]["ResolvedConverter"];
+            mode: string;
+            modeReason: string;
+            rule: components["schemas"]["ResolvedRule"];
+        };
+        /** @description Fractional open-circuit voltage, every default filled in. */
+        ResolvedFractionalOpenCircuitVoltageRule: {
+            /** @description Time between two decisions of the rule. Unit: s. */
+            controlPeriod: number;
+            /** @description Share of the open-circuit voltage that is held. Unit: 1, of the sampled open-circuit voltage. */
+            fraction: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "fractional-open-circuit-voltage";
+            /** @description Reads a pilot cell of its own, fresh at each decision, instead of interrupting the array. */
+            pilotCell: boolean;
+            /** @description How long one sample interrupts the power; shorter than the sample period. Unit: s. */
+            sampleDuration: number;
+            /** @description Time from the start of one sample to the start of the next. Unit: s. */
+            samplePeriod: number;
+            /** @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Unit: 1, of the open-circuit voltage at standard test conditions. */
+            stepFraction: number;
+        };
+        /** @description Incremental conductance, every default filled in. */
+        ResolvedIncrementalConductanceRule: {
+            /** @description Time between two decisions of the rule. Unit: s. */
+            controlPeriod: number;
+            /** @description Relative change of the current that wakes a resting rule. Unit: 1, of the current. */
+            currentTolerance: number;
+            /** @description Relative slope of the power curve below which the rule rests; 0 never rests. Unit: 1, of the relative slope 1 + (V/I) dI/dV. */
+            holdTolerance: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "incremental-conductance";
+            /** @description Step of the array voltage at each decision. Unit: 1, of the open-circuit voltage at standard test conditions. */
+            stepFraction: number;
+        };
+        /** @description Perfect tracking, every default filled in. */
+        ResolvedPerfectRule: {
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "perfect";
+        };
+        /** @description Perturb and observe, every default filled in. */
+        ResolvedPerturbAndObserveRule: {
+            /** @description Time between two decisions of the rule. Unit: s. */
+            controlPeriod: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "perturb-and-observe";
+            /** @description Step of the array voltage at each decision. Unit: 1, of the open-circuit voltage at standard test conditions. */
+            stepFraction: number;
+        };
+        /** @description Power curve scan, every default filled in. */
+        ResolvedPowerCurveScanRule: {
+            /** @description What follows a sweep: climb from the best voltage by comparing powers, or hold it. */
+            afterwards: string;
+            /** @description Time between two decisions of the rule. Unit: s. */
+            controlPeriod: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "power-curve-scan";
+            /** @description Voltages tried in one sweep, equally spaced over the window inside 0 V to open circuit. Unit: 1. */
+            points: number;
+            /** @description Time from the start of one sweep to the start of the next. Unit: s. */
+            scanPeriod: number;
+            /** @description Step of the array voltage at each decision. Unit: 1, of the open-circuit voltage at standard test conditions. */
+            stepFraction: number;
+            /** @description How long one sweep takes, nothing being delivered: an upper bound of its cost. Shorter than the scan period. Unit: s. */
+            sweepDuration: number;
+        };
+        /** @description The rule as it was computed, every default filled in. */
+        ResolvedRule: components["schemas"]["ResolvedPerfectRule"] | components["schemas"]["ResolvedConstantVoltageRule"] | components["schemas"]["ResolvedTemperatureCompensatedVoltageRule"] | components["schemas"]["ResolvedFractionalOpenCircuitVoltageRule"] | components["schemas"]["ResolvedShortCurrentPulseRule"] | components["schemas"]["ResolvedBatteryCoupledRule"] | components["schemas"]["ResolvedPerturbAndObserveRule"] | components["schemas"]["ResolvedIncrementalConductanceRule"] | components["schemas"]["ResolvedPowerCurveScanRule"];
+        /** @description Errors of the converter's sensors. */
+        ResolvedSensorError: {
+            /** @description Reading over true current, minus 1. Unit: 1. */
+            currentGain: number;
+            /** @description Offset over the array's short-circuit current. Unit: 1. */
+            currentOffset: number;
+            /** @description Reading over true voltage, minus 1. Unit: 1. */
+            voltageGain: number;
+            /** @description Offset over the array's open-circuit voltage. Unit: 1. */
+            voltageOffset: number;
+        };
+        /** @description Steps of the converter's sensors. */
+        ResolvedSensorResolution: {
+            /** @description Step over the array's short-circuit current; 0: not rounded. Unit: 1. */
+            current: number;
+            /** @description Step over the array's open-circuit voltage; 0: not rounded. Unit: 1. */
+            voltage: number;
+        };
+        /** @description Short-current pulse, every default filled in. */
+        ResolvedShortCurrentPulseRule: {
+            /** @description Time between two decisions of the rule. Unit: s. */
+            controlPeriod: number;
+            /** @description Share of the short-circuit current that is held. Unit: 1, of the sampled short-circuit current. */
+            fraction: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "short-current-pulse";
+            /** @description Reads a pilot cell of its own, fresh at each decision, instead of interrupting the array. */
+            pilotCell: boolean;
+            /** @description How long one sample interrupts the power; shorter than the sample period. Unit: s. */
+            sampleDuration: number;
+            /** @description Time from the start of one sample to the start of the next. Unit: s. */
+            samplePeriod: number;
+            /** @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Unit: 1, of the open-circuit voltage at standard test conditions. */
+            stepFraction: number;
+        };
+        /** @description Temperature-compensated voltage, every default filled in. */
+        ResolvedTemperatureCompensatedVoltageRule: {
+            /** @description Change of the held voltage with cell temperature. Unit: %/K, of the set voltage. */
+            coefficient: number;
+            /** @description Time between two decisions of the rule. Unit: s. */
+            controlPeriod: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "temperature-compensated-voltage";
+            /** @description Voltage held at a cell temperature of 25 degC, per module in series. Unit: V. */
+            setVoltagePerModule: number;
+            /** @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Unit: 1, of the open-circuit voltage at standard test conditions. */
+            stepFraction: number;
+        };
+        /** @description How the converter decides the array voltage, with the rule's settings. */
+        Rule: components["schemas"]["PerfectRule"] | components["schemas"]["ConstantVoltageRule"] | components["schemas"]["TemperatureCompensatedVoltageRule"] | components["schemas"]["FractionalOpenCircuitVoltageRule"] | components["schemas"]["ShortCurrentPulseRule"] | components["schemas"]["BatteryCoupledRule"] | components["schemas"]["PerturbAndObserveRule"] | components["schemas"]["IncrementalConductanceRule"] | components["schemas"]["PowerCurveScanRule"];
+        /** @description Every tracking rule with its parameters. */
+        RuleCatalogue: {
+            rules: components["schemas"]["RuleDescription"][];
+        };
+        /** @description One tracking rule. */
+        RuleDescription: {
+            description: string;
+            /** @description What interrupts the power: nothing, open-circuit, short-circuit or sweep. */
+            interrupts: string;
+            kind: string;
+            parameters: components["schemas"]["RuleParameter"][];
+            sources: string[];
+            title: string;
+        };
+        /** @description One setting of a rule. */
+        RuleParameter: {
+            choices: string[] | null;
+            /** @description Null where it is derived or where there is none. */
+            default: number | boolean | string | null;
+            /** @description In words, where the default follows from the array. */
+            derivedDefault: string | null;
+            description: string;
+            /** @description Must be above this. Unit: that of the parameter. */
+            exclusiveMinimum: number | null;
+            /** @description True where only whole numbers will do. */
+            integer: boolean;
+            /** @description Unit: that of the parameter. */
+            maximum: number | null;
+            /** @description Unit: that of the parameter. */
+            minimum: number | null;
+            /** @description The member's name in a request. */
+            name: string;
+            /** @description True where there is no default. */
+            required: boolean;
+            /** @description Where default and usual range come from. */
+            source: string;
+            /** @description number, flag, choice, or series (a number or one a sample). */
+            type: string;
+            /** @description Null for flags and choices. */
+            unit: string | null;
+            usual: components["schemas"]["UsualRange"];
+        };
+        /** @description Errors of the converter's sensors; none by default. */
+        SensorError: {
+            /**
+             * @description Reading over true current, minus 1. Unit: 1.
+             * @default 0
+             */
+            currentGain?: number;
+            /**
+             * @description Added to the current reading. Unit: 1, of the array's short-circuit current at standard test conditions.
+             * @default 0
+             */
+            currentOffset?: number;
+            /**
+             * @description Reading over true voltage, minus 1. Unit: 1.
+             * @default 0
+             */
+            voltageGain?: number;
+            /**
+             * @description Added to the voltage reading. Unit: 1, of the array's open-circuit voltage at standard test conditions.
+             * @default 0
+             */
+            voltageOffset?: number;
+        };
+        /** @description Steps of the converter's sensors; none by default. */
+        SensorResolution: {
+            /**
+             * @description Step the current reading is rounded to; 0: not rounded. Unit: 1, of the array's short-circuit current at standard test conditions.
+             * @default 0
+             */
+            current?: number;
+            /**
+             * @description Step the voltage reading is rounded to; 0: not rounded. Unit: 1, of the array's open-circuit voltage at standard test conditions.
+             * @default 0
+             */
+            voltage?: number;
+        };
+        /**
+         * Short-current pulse
+         * @description Short-circuits the array each sample period, reads its short-circuit current and holds a fraction of it until the next pulse.
+         */
+        ShortCurrentPulseRule: {
+            /**
+             * @description Time between two decisions of the rule. Usual: 0.02 to 1. Source: common practice, no source. Unit: s.
+             * @default 1
+             */
+            controlPeriod?: number;
+            /**
+             * @description Share of the short-circuit current that is held. Usual: 0.78 to 0.92. Source: default: Noguchi et al. 2002 (from memory); usual range: Esram & Chapman 2007 (from memory). Unit: 1, of the sampled short-circuit current.
+             * @default 0.92
+             */
+            fraction?: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "short-current-pulse";
+            /**
+             * @description Reads a pilot cell of its own, fresh at each decision, instead of interrupting the array. Source: common practice, no source.
+             * @default false
+             */
+            pilotCell?: boolean;
+            /**
+             * @description How long one sample interrupts the power; shorter than the sample period. Usual: 0.001 to 1. Source: common practice, no source. Unit: s.
+             * @default 0.032
+             */
+            sampleDuration?: number;
+            /**
+             * @description Time from the start of one sample to the start of the next. Usual: 1 to 600. Source: common practice, no source. Unit: s.
+             * @default 16
+             */
+            samplePeriod?: number;
+            /**
+             * @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Usual: 0 to 0.02. Source: common practice, no source. Unit: 1, of the open-circuit voltage at standard test conditions.
+             * @default 0
+             */
+            stepFraction?: number;
+        };
+        /** @description A module by the parameters of its single-diode circuit at 1000 W/m2 and 25 degC. */
+        SingleDiodeModule: {
+            /**
+             * @description Band gap of the cells at 25 degC; silicon by default. Unit: eV.
+             * @default 1.121
+             */
+            bandgap?: number;
+            /**
+             * @description Relative change of the band gap with temperature; silicon by default. Unit: 1/K.
+             * @default -0.0002677
+             */
+            bandgapCoefficient?: number;
+            /** @description Cells in series inside the module. Unit: 1. */
+            cellsInSeries: number;
+            /** @description n Ns k T/q of the whole module at 25 degC (about 0.026 V to 0.05 V a cell). Unit: V. */
+            idealityVoltage: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "single-diode";
+            /** @description Photocurrent at standard test conditions. Unit: A. */
+            photocurrent: number;
+            /**
+             * @description Change of the photocurrent with temperature. Unit: %/K.
+             * @default 0
+             */
+            photocurrentCoefficient?: number;
+            /** @description Saturation current of the diode at 25 degC. Unit: A. */
+            saturationCurrent: number;
+            /** @description Series resistance of the module. Unit: ohm. */
+            seriesResistance: number;
+            /** @description Shunt resistance of the module at 1000 W/m2; null: infinite. Unit: ohm. */
+            shuntResistance: number | null;
+        };
+        /** @description The temperature of a climate. */
+        Temperature: components["schemas"]["CellTemperature"] | components["schemas"]["AmbientTemperature"];
+        /**
+         * Temperature-compensated voltage
+         * @description Holds a set voltage per module, corrected by a coefficient times the cell temperature's distance from 25 degC.
+         */
+        TemperatureCompensatedVoltageRule: {
+            /** @description Change of the held voltage with cell temperature. Usual: -0.6 to -0.2. Default: the module's change of open-circuit voltage in V/K, over the set voltage. Source: common practice, no source. Unit: %/K, of the set voltage. */
+            coefficient?: number;
+            /**
+             * @description Time between two decisions of the rule. Usual: 0.02 to 1. Source: common practice, no source. Unit: s.
+             * @default 1
+             */
+            controlPeriod?: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "temperature-compensated-voltage";
+            /** @description Voltage held at a cell temperature of 25 degC, per module in series. Default: maximum power voltage of the module at standard test conditions. Source: common practice, no source. Unit: V. */
+            setVoltagePerModule?: number;
+            /**
+             * @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Usual: 0 to 0.02. Source: common practice, no source. Unit: 1, of the open-circuit voltage at standard test conditions.
+             * @default 0
+             */
+            stepFraction?: number;
+        };
+        /** @description The generator of EN 50530:2010 Annex C and IEC 62891:2020 Annex A. */
+        TestGeneratorModule: {
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "test-generator";
+            /** @description Nominal maximum power at standard test conditions. Unit: W. */
+            maximumPower: number;
+            /** @description Nominal voltage at maximum power. Unit: V. */
+            maximumPowerVoltage: number;
+            /**
+             * @description Which of the standard's constants hold.
+             * @enum {string}
+             */
+            technology: "crystalline-silicon" | "thin-film";
+        };
+        /** @description Null where none were asked for. */
+        Traces: {
+            lostByCause?: components["schemas"]["CauseTrace"];
+            maximumPower?: components["schemas"]["PointTrace"];
+            operating?: components["schemas"]["PointTrace"];
+            /** @description Start of the first sample, ISO 8601, as it was sent. */
+            start: string;
+            /** @description Time from one sample to the next. Unit: s. */
+            step: number;
+        } | null;
+        /** @description What is usual in the field. */
+        UsualRange: {
+            /** @description Lower end. Unit: that of the parameter. */
+            from: number;
+            /** @description Upper end. Unit: that of the parameter. */
+            to: number;
+        } | null;
+        /** @description Which service this is and what it admits. */
+        VersionAnswer: {
+            limits: components["schemas"]["LimitsInForce"];
+            name: string;
+            /** @description Of the service. */
+            version: string;
+        };
+    };
+    responses: never;
+    parameters: {
+        /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+        RequestId: string;
+    };
+    requestBodies: never;
+    headers: {
+        /** @description The methods that fit this path. */
+        Allow: string;
+        /** @description Finds the request in the service's log. */
+        RequestId: string;
+        /** @description Seconds after which a retry makes sense. */
+        RetryAfter: string;
+        /** @description How a key is shown: Bearer. */
+        WwwAuthenticate: string;
+    };
+    pathItems: never;
+}
+export type AmbientTemperature = components['schemas']['AmbientTemperature'];
+export type ArrayLayout = components['schemas']['ArrayLayout'];
+export type BatteryCoupledRule = components['schemas']['BatteryCoupledRule'];
+export type Candidate = components['schemas']['Candidate'];
+export type CauseTrace = components['schemas']['CauseTrace'];
+export type Caution = components['schemas']['Caution'];
+export type CellTemperature = components['schemas']['CellTemperature'];
+export type CellTemperatureModel = components['schemas']['CellTemperatureModel'];
+export type Circuit = components['schemas']['Circuit'];
+export type Climate = components['schemas']['Climate'];
+export type ComparedCandidate = components['schemas']['ComparedCandidate'];
+export type ComparisonAnswer = components['schemas']['ComparisonAnswer'];
+export type ComparisonRequest = components['schemas']['ComparisonRequest'];
+export type ConstantVoltageRule = components['schemas']['ConstantVoltageRule'];
+export type Converter = components['schemas']['Converter'];
+export type Coverage = components['schemas']['Coverage'];
+export type DatasheetModule = components['schemas']['DatasheetModule'];
+export type Energy = components['schemas']['Energy'];
+export type EnergyValue = components['schemas']['EnergyValue'];
+export type EstimateAnswer = components['schemas']['EstimateAnswer'];
+export type EstimateRequest = components['schemas']['EstimateRequest'];
+export type FaimanModel = components['schemas']['FaimanModel'];
+export type FractionalOpenCircuitVoltageRule = components['schemas']['FractionalOpenCircuitVoltageRule'];
+export type Health = components['schemas']['Health'];
+export type IncrementalConductanceRule = components['schemas']['IncrementalConductanceRule'];
+export type Irradiance = components['schemas']['Irradiance'];
+export type IrradianceClass = components['schemas']['IrradianceClass'];
+export type KingModel = components['schemas']['KingModel'];
+export type LimitsInForce = components['schemas']['LimitsInForce'];
+export type LostByCause = components['schemas']['LostByCause'];
+export type Misfits = components['schemas']['Misfits'];
+export type Model = components['schemas']['Model'];
+export type Module = components['schemas']['Module'];
+export type ModuleAnswer = components['schemas']['ModuleAnswer'];
+export type Month = components['schemas']['Month'];
+export type NoctModel = components['schemas']['NoctModel'];
+export type PerfectRule = components['schemas']['PerfectRule'];
+export type PerturbAndObserveRule = components['schemas']['PerturbAndObserveRule'];
+export type PlaneOfArrayIrradiance = components['schemas']['PlaneOfArrayIrradiance'];
+export type PointTrace = components['schemas']['PointTrace'];
+export type PowerCurveScanRule = components['schemas']['PowerCurveScanRule'];
+export type Problem = components['schemas']['Problem'];
+export type ProblemError = components['schemas']['ProblemError'];
+export type Provenance = components['schemas']['Provenance'];
+export type ResolvedArrayLayout = components['schemas']['ResolvedArrayLayout'];
+export type ResolvedBatteryCoupledRule = components['schemas']['ResolvedBatteryCoupledRule'];
+export type ResolvedCandidate = components['schemas']['ResolvedCandidate'];
+export type ResolvedComparison = components['schemas']['ResolvedComparison'];
+export type ResolvedConstantVoltageRule = components['schemas']['ResolvedConstantVoltageRule'];
+export type ResolvedConverter = components['schemas']['ResolvedConverter'];
+export type ResolvedEnergyValue = components['schemas']['ResolvedEnergyValue'];
+export type ResolvedEstimate = components['schemas']['ResolvedEstimate'];
+export type ResolvedFractionalOpenCircuitVoltageRule = components['schemas']['ResolvedFractionalOpenCircuitVoltageRule'];
+export type ResolvedIncrementalConductanceRule = components['schemas']['ResolvedIncrementalConductanceRule'];
+export type ResolvedPerfectRule = components['schemas']['ResolvedPerfectRule'];
+export type ResolvedPerturbAndObserveRule = components['schemas']['ResolvedPerturbAndObserveRule'];
+export type ResolvedPowerCurveScanRule = components['schemas']['ResolvedPowerCurveScanRule'];
+export type ResolvedRule = components['schemas']['ResolvedRule'];
+export type ResolvedSensorError = components['schemas']['ResolvedSensorError'];
+export type ResolvedSensorResolution = components['schemas']['ResolvedSensorResolution'];
+export type ResolvedShortCurrentPulseRule = components['schemas']['ResolvedShortCurrentPulseRule'];
+export type ResolvedTemperatureCompensatedVoltageRule = components['schemas']['ResolvedTemperatureCompensatedVoltageRule'];
+export type Rule = components['schemas']['Rule'];
+export type RuleCatalogue = components['schemas']['RuleCatalogue'];
+export type RuleDescription = components['schemas']['RuleDescription'];
+export type RuleParameter = components['schemas']['RuleParameter'];
+export type SensorError = components['schemas']['SensorError'];
+export type SensorResolution = components['schemas']['SensorResolution'];
+export type ShortCurrentPulseRule = components['schemas']['ShortCurrentPulseRule'];
+export type SingleDiodeModule = components['schemas']['SingleDiodeModule'];
+export type Temperature = components['schemas']['Temperature'];
+export type TemperatureCompensatedVoltageRule = components['schemas']['TemperatureCompensatedVoltageRule'];
+export type TestGeneratorModule = components['schemas']['TestGeneratorModule'];
+export type Traces = components['schemas']['Traces'];
+export type UsualRange = components['schemas']['UsualRange'];
+export type VersionAnswer = components['schemas']['VersionAnswer'];
+export type ParameterRequestId = components['parameters']['RequestId'];
+export type HeaderAllow = components['headers']['Allow'];
+export type HeaderRequestId = components['headers']['RequestId'];
+export type HeaderRetryAfter = components['headers']['RetryAfter'];
+export type HeaderWwwAuthenticate = components['headers']['WwwAuthenticate'];
+export type $defs = Record<string, never>;
+export interface operations {
+    liveness: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description It is. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    /**
+                     * @example {
+                     *       "status": "live"
+                     *     }
+                     */
+                    "application/json": components["schemas"]["Health"];
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    readiness: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description They may. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    /**
+                     * @example {
+                     *       "status": "ready"
+                     *     }
+                     */
+                    "application/json": components["schemas"]["Health"];
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `warming`: The workers are not warm yet. `draining`: Nothing was begun; another replica, or this one after its restart, will answer. */
+            503: {
+                headers: {
+                    "retry-after": components["headers"]["RetryAfter"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    document: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description This document. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": Record<string, never>;
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    compare: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "module": {
+                 *         "kind": "datasheet",
+                 *         "cellsInSeries": 60,
+                 *         "shortCircuitCurrent": 9.91,
+                 *         "openCircuitVoltage": 38.9,
+                 *         "maximumPowerCurrent": 9.36,
+                 *         "maximumPowerVoltage": 31.8,
+                 *         "shortCircuitCurrentCoefficient": 0.05,
+                 *         "openCircuitVoltageCoefficient": -0.29
+                 *       },
+                 *       "array": {
+                 *         "modulesInSeries": 2
+                 *       },
+                 *       "candidates": [
+                 *         {
+                 *           "label": "one voltage",
+                 *           "rule": {
+                 *             "kind": "constant-voltage",
+                 *             "setVoltagePerModule": 29
+                 *           },
+                 *           "price": 120
+                 *         },
+                 *         {
+                 *           "label": "climbs",
+                 *           "rule": {
+                 *             "kind": "perturb-and-observe",
+                 *             "stepFraction": 0.005
+                 *           },
+                 *           "price": 180
+                 *         }
+                 *       ],
+                 *       "baseline": "one voltage",
+                 *       "climate": {
+                 *         "start": "2025-04-12T00:00:00+02:00",
+                 *         "step": 10800,
+                 *         "irradiance": {
+                 *           "kind": "plane-of-array",
+                 *           "values": [
+                 *             0,
+                 *             0,
+                 *             120,
+                 *             560,
+                 *             810,
+                 *             470,
+                 *             60,
+                 *             0
+                 *           ]
+                 *         },
+                 *         "temperature": {
+                 *           "kind": "ambient",
+                 *           "values": [
+                 *             4.1,
+                 *             3.6,
+                 *             7.2,
+                 *             11.8,
+                 *             14.9,
+                 *             14.1,
+                 *             9.3,
+                 *             6
+                 *           ]
+                 *         }
+                 *       },
+                 *       "energyValue": {
+                 *         "currency": "EUR",
+                 *         "perKilowattHour": 0.24
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["ComparisonRequest"];
+            };
+        };
+        responses: {
+            /** @description One result a candidate, in the order of the request. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    /**
+                     * @example {
+                     *       "resolved": {
+                     *         "array": {
+                     *           "modulesInSeries": 2,
+                     *           "stringsInParallel": 1,
+                     *           "wiringResistance": 0
+                     *         },
+                     *         "candidates": [
+                     *           {
+                     *             "label": "one voltage",
+                     *             "rule": {
+                     *               "kind": "constant-voltage",
+                     *               "setVoltagePerModule": 29,
+                     *               "controlPeriod": 1,
+                     *               "stepFraction": 0
+                     *             },
+                     *             "converter": {
+                     *               "trackingMinimumVoltage": 0,
+                     *               "trackingMaximumVoltage": null,
+                     *               "inputVoltageRating": null,
+                     *               "maximumPower": null,
+                     *               "maximumCurrent": null,
+                     *               "wakePower": 0,
+                     *               "rippleAmplitude": 0,
+                     *               "sensorError": {
+                     *                 "voltageGain": 0,
+                     *                 "voltageOffset": 0,
+                     *                 "currentGain": 0,
+                     *                 "currentOffset": 0
+                     *               },
+                     *               "resolution": {
+                     *                 "voltage": 0,
+                     *                 "current": 0
+                     *               }
+                     *             },
+                     *             "price": 120
+                     *           },
+                     *           {
+                     *             "label": "climbs",
+                     *             "rule": {
+                     *               "kind": "perturb-and-observe",
+                     *               "controlPeriod": 0.1,
+                     *               "stepFraction": 0.005
+                     *             },
+                     *             "converter": {
+                     *               "trackingMinimumVoltage": 0,
+                     *               "trackingMaximumVoltage": null,
+                     *               "inputVoltageRating": null,
+                     *               "maximumPower": null,
+                     *               "maximumCurrent": null,
+                     *               "wakePower": 0,
+                     *               "rippleAmplitude": 0,
+                     *               "sensorError": {
+                     *                 "voltageGain": 0,
+                     *                 "voltageOffset": 0,
+                     *                 "currentGain": 0,
+                     *                 "currentOffset": 0
+                     *               },
+                     *               "resolution": {
+                     *                 "voltage": 0,
+                     *                 "current": 0
+                     *               }
+                     *             },
+                     *             "price": 180
+                     *           }
+                     *         ],
+                     *         "baseline": "one voltage",
+                     *         "energyValue": {
+                     *           "currency": "EUR",
+                     *           "perKilowattHour": 0.24
+                     *         },
+                     *         "mode": "steady",
+                     *         "modeReason": "a step of 10800 s is longer than 300 s"
+                     *       },
+                     *       "results": [
+                     *         {
+                     *           "label": "one voltage",
+                     *           "rank": 2,
+                     *           "energy": {
+                     *             "available": 3.53694,
+                     *             "delivered": 3.41718,
+                     *             "lost": 0.119763,
+                     *             "clipped": 0,
+                     *             "lostFraction": 0.0338605,
+                     *             "trackingEfficiency": 0.96614,
+                     *             "insolation": 6.06
+                     *           },
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.119763,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0
+                     *           },
+                     *           "differenceToBaseline": 0,
+                     *           "differenceToBest": -0.118926,
+                     *           "worthPerYear": null,
+                     *           "worthReason": "the climate lasts 1 days, not 365 or 366",
+                     *           "payback": null
+                     *         },
+                     *         {
+                     *           "label": "climbs",
+                     *           "rank": 1,
+                     *           "energy": {
+                     *             "available": 3.53694,
+                     *             "delivered": 3.53611,
+                     *             "lost": 0.000836952,
+                     *             "clipped": 0,
+                     *             "lostFraction": 0.000236631,
+                     *             "trackingEfficiency": 0.999763,
+                     *             "insolation": 6.06
+                     *           },
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0,
+                     *             "heldSample": 0,
+                     *             "regulation": 0.000836952,
+                     *             "interruption": 0
+                     *           },
+                     *           "differenceToBaseline": 0.118926,
+                     *           "differenceToBest": 0,
+                     *           "worthPerYear": null,
+                     *           "worthReason": "the climate lasts 1 days, not 365 or 366",
+                     *           "payback": null
+                     *         }
+                     *       ],
+                     *       "coverage": {
+                     *         "samples": 8,
+                     *         "used": 8,
+                     *         "skipped": 0
+                     *       },
+                     *       "module": {
+                     *         "fit": "exact",
+                     *         "circuit": {
+                     *           "kind": "single-diode",
+                     *           "cellsInSeries": 60,
+                     *           "photocurrent": 9.91785,
+                     *           "saturationCurrent": 2.22059e-11,
+                     *           "seriesResistance": 0.284981,
+                     *           "shuntResistance": 359.887,
+                     *           "idealityVoltage": 1.45073,
+                     *           "photocurrentCoefficient": 0.0499604,
+                     *           "bandgap": 1.121,
+                     *           "bandgapCoefficient": -0.0002677
+                     *         },
+                     *         "misfits": {
+                     *           "shortCircuitCurrent": 2.22045e-16,
+                     *           "openCircuitVoltage": 0,
+                     *           "maximumPowerCurrent": -2.22045e-16,
+                     *           "maximumPowerSlope": -7.59127e-16,
+                     *           "openCircuitVoltageCoefficient": -3.10862e-15
+                     *         }
+                     *       },
+                     *       "cautions": [
+                     *         {
+                     *           "code": "cold-voltage-not-checked",
+                     *           "severity": "warning",
+                     *           "detail": "No inputVoltageRating was given, so the open-circuit voltage of 85.6 V at 3.6 degC was not checked against it.",
+                     *           "values": {
+                     *             "temperature": 3.6,
+                     *             "openCircuitVoltage": 85.58,
+                     *             "moduleByCircuit": 41.2991,
+                     *             "moduleByCoefficient": 41.3141,
+                     *             "moduleByFactorTable": 42.79
+                     *           }
+                     *         },
+                     *         {
+                     *           "code": "series-cold-is-not-record-cold",
+                     *           "severity": "info",
+                     *           "detail": "The coldest temperature of the series, 3.6 degC, was taken; the site's record low is likely colder. Give recordLowTemperature.",
+                     *           "values": {
+                     *             "temperature": 3.6
+                     *           }
+                     *         },
+                     *         {
+                     *           "code": "wind-assumed",
+                     *           "detail": "No wind speed was given: 1 m/s was taken throughout for the cell temperature.",
+                     *           "values": {
+                     *             "windSpeed": 1
+                     *           },
+                     *           "severity": "info"
+                     *         },
+                     *         {
+                     *           "code": "planning-estimate",
+                     *           "severity": "info",
+                     *           "detail": "Estimates for planning, not an electrical design. Photovoltaic strings are a shock, arc and fire hazard and cannot be switched off in daylight. Local codes and a licensed designer decide.",
+                     *           "values": {}
+                     *         }
+                     *       ],
+                     *       "provenance": {
+                     *         "version": "0.1.0",
+                     *         "models": [
+                     *           {
+                     *             "name": "datasheet-fit",
+                     *             "version": "1",
+                     *             "source": "De Soto, Klein & Beckman, Solar Energy 80 (2006) 78-88 (from memory), its five conditions"
+                     *           },
+                     *           {
+                     *             "name": "single-diode",
+                     *             "version": "1",
+                     *             "source": "De Soto, Klein & Beckman, Solar Energy 80 (2006) 78-88 (from memory), its translation to irradiance and temperature"
+                     *           },
+                     *           {
+                     *             "name": "cell-temperature-faiman",
+                     *             "version": "1",
+                     *             "source": "Faiman, Prog. Photovolt. 16 (2008) 307-315"
+                     *           },
+                     *           {
+                     *             "name": "constant-voltage",
+                     *             "version": "1",
+                     *             "source": "Esram & Chapman, IEEE Trans. Energy Convers. 22(2) (2007) 439-449 (from memory)"
+                     *           },
+                     *           {
+                     *             "name": "perturb-and-observe",
+                     *             "version": "1",
+                     *             "source": "Femia, Petrone, Spagnuolo & Vitelli, IEEE Trans. Power Electron. 20(4) (2005) 963-973 (from memory)"
+                     *           },
+                     *           {
+                     *             "name": "steady-tracking",
+                     *             "version": "1",
+                     *             "source": "own derivation: each sample at rest, the causes telescoping from available to delivered power"
+                     *           }
+                     *         ],
+                     *         "inputDigest": "e6db862a7a04e886ea65c9d7ae15dedb74eeeb7290203c9980f6aa4bb5787f59"
+                     *       }
+                     *     }
+                     */
+                    "application/json": components["schemas"]["ComparisonAnswer"];
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. `malformed-body`: Not UTF-8, not JSON, nested too deep, or not gzip. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unauthorized`: No key, or none that is known. */
+            401: {
+                headers: {
+                    "www-authenticate": components["headers"]["WwwAuthenticate"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-slow`: No byte of it arrived for a while, or it took too long as a whole. */
+            408: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            413: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            415: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-request`: Schema, relations or physics; every error says where and what would be right. `too-much-work`: Refused before starting, with the estimate and the limit. `time-limit-exceeded`: Stopped at the limit of computing time; the same request would end the same. */
+            422: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. `worker-lost`: The worker died or ran out of memory with this request; do not simply retry. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `overloaded`: The queue is full; nothing was begun. Retry after the time that Retry-After says. `draining`: Nothing was begun; another replica, or this one after its restart, will answer. */
+            503: {
+                headers: {
+                    "retry-after": components["headers"]["RetryAfter"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    estimate: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "module": {
+                 *         "kind": "datasheet",
+                 *         "cellsInSeries": 60,
+                 *         "shortCircuitCurrent": 9.91,
+                 *         "openCircuitVoltage": 38.9,
+                 *         "maximumPowerCurrent": 9.36,
+                 *         "maximumPowerVoltage": 31.8,
+                 *         "shortCircuitCurrentCoefficient": 0.05,
+                 *         "openCircuitVoltageCoefficient": -0.29
+                 *       },
+                 *       "rule": {
+                 *         "kind": "fractional-open-circuit-voltage"
+                 *       },
+                 *       "climate": {
+                 *         "start": "2025-04-12T00:00:00+02:00",
+                 *         "step": 10800,
+                 *         "irradiance": {
+                 *           "kind": "plane-of-array",
+                 *           "values": [
+                 *             0,
+                 *             0,
+                 *             120,
+                 *             560,
+                 *             810,
+                 *             470,
+                 *             60,
+                 *             0
+                 *           ]
+                 *         },
+                 *         "temperature": {
+                 *           "kind": "ambient",
+                 *           "values": [
+                 *             4.1,
+                 *             3.6,
+                 *             7.2,
+                 *             11.8,
+                 *             14.9,
+                 *             14.1,
+                 *             9.3,
+                 *             6
+                 *           ]
+                 *         }
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["EstimateRequest"];
+            };
+        };
+        responses: {
+            /** @description Energies, causes, months, irradiance classes, traces and cautions. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    /**
+                     * @example {
+                     *       "resolved": {
+                     *         "array": {
+                     *           "modulesInSeries": 1,
+                     *           "stringsInParallel": 1,
+                     *           "wiringResistance": 0
+                     *         },
+                     *         "converter": {
+                     *           "trackingMinimumVoltage": 0,
+                     *           "trackingMaximumVoltage": null,
+                     *           "inputVoltageRating": null,
+                     *           "maximumPower": null,
+                     *           "maximumCurrent": null,
+                     *           "wakePower": 0,
+                     *           "rippleAmplitude": 0,
+                     *           "sensorError": {
+                     *             "voltageGain": 0,
+                     *             "voltageOffset": 0,
+                     *             "currentGain": 0,
+                     *             "currentOffset": 0
+                     *           },
+                     *           "resolution": {
+                     *             "voltage": 0,
+                     *             "current": 0
+                     *           }
+                     *         },
+                     *         "rule": {
+                     *           "kind": "fractional-open-circuit-voltage",
+                     *           "fraction": 0.76,
+                     *           "samplePeriod": 16,
+                     *           "sampleDuration": 0.256,
+                     *           "pilotCell": false,
+                     *           "controlPeriod": 1,
+                     *           "stepFraction": 0
+                     *         },
+                     *         "mode": "steady",
+                     *         "modeReason": "a step of 10800 s is longer than 300 s"
+                     *       },
+                     *       "energy": {
+                     *         "available": 1.76847,
+                     *         "delivered": 1.64937,
+                     *         "lost": 0.119098,
+                     *         "clipped": 0,
+                     *         "lostFraction": 0.0673451,
+                     *         "trackingEfficiency": 0.932655,
+                     *         "insolation": 6.06
+                     *       },
+                     *       "lostByCause": {
+                     *         "voltageWindow": 0,
+                     *         "wrongPeak": 0,
+                     *         "setPoint": 0.0922788,
+                     *         "heldSample": 0,
+                     *         "regulation": 0,
+                     *         "interruption": 0.0268191
+                     *       },
+                     *       "months": [
+                     *         {
+                     *           "month": "2025-04",
+                     *           "available": 1.76847,
+                     *           "delivered": 1.64937,
+                     *           "lost": 0.119098,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.0922788,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0.0268191
+                     *           }
+                     *         }
+                     *       ],
+                     *       "irradianceClasses": [
+                     *         {
+                     *           "from": 0,
+                     *           "to": 100,
+                     *           "hours": 12,
+                     *           "available": 0.0538844,
+                     *           "lost": 0.00588872
+                     *         },
+                     *         {
+                     *           "from": 100,
+                     *           "to": 200,
+                     *           "hours": 3,
+                     *           "available": 0.110517,
+                     *           "lost": 0.0119657
+                     *         },
+                     *         {
+                     *           "from": 400,
+                     *           "to": 500,
+                     *           "hours": 3,
+                     *           "available": 0.418174,
+                     *           "lost": 0.0321277
+                     *         },
+                     *         {
+                     *           "from": 500,
+                     *           "to": 600,
+                     *           "hours": 3,
+                     *           "available": 0.497526,
+                     *           "lost": 0.035468
+                     *         },
+                     *         {
+                     *           "from": 800,
+                     *           "to": 900,
+                     *           "hours": 3,
+                     *           "available": 0.68837,
+                     *           "lost": 0.0336476
+                     *         }
+                     *       ],
+                     *       "coverage": {
+                     *         "samples": 8,
+                     *         "used": 8,
+                     *         "skipped": 0
+                     *       },
+                     *       "traces": {
+                     *         "start": "2025-04-12T00:00:00+02:00",
+                     *         "step": 10800,
+                     *         "maximumPower": {
+                     *           "voltage": [
+                     *             0,
+                     *             0,
+                     *             32.793,
+                     *             31.533,
+                     *             30.149,
+                     *             31.57,
+                     *             31.992,
+                     *             0
+                     *           ],
+                     *           "current": [
+                     *             0,
+                     *             0,
+                     *             1.123,
+                     *             5.259,
+                     *             7.611,
+                     *             4.415,
+                     *             0.561,
+                     *             0
+                     *           ],
+                     *           "power": [
+                     *             0,
+                     *             0,
+                     *             36.839,
+                     *             165.842,
+                     *             229.457,
+                     *             139.391,
+                     *             17.961,
+                     *             0
+                     *           ]
+                     *         },
+                     *         "operating": {
+                     *           "voltage": [
+                     *             0,
+                     *             0,
+                     *             28.534,
+                     *             28.54,
+                     *             28.003,
+                     *             28.39,
+                     *             27.786,
+                     *             0
+                     *           ],
+                     *           "current": [
+                     *             0,
+                     *             0,
+                     *             1.151,
+                     *             5.397,
+                     *             7.793,
+                     *             4.533,
+                     *             0.576,
+                     *             0
+                     *           ],
+                     *           "power": [
+                     *             0,
+                     *             0,
+                     *             32.85,
+                     *             154.019,
+                     *             218.241,
+                     *             128.682,
+                     *             15.999,
+                     *             0
+                     *           ]
+                     *         }
+                     *       },
+                     *       "module": {
+                     *         "fit": "exact",
+                     *         "circuit": {
+                     *           "kind": "single-diode",
+                     *           "cellsInSeries": 60,
+                     *           "photocurrent": 9.91785,
+                     *           "saturationCurrent": 2.22059e-11,
+                     *           "seriesResistance": 0.284981,
+                     *           "shuntResistance": 359.887,
+                     *           "idealityVoltage": 1.45073,
+                     *           "photocurrentCoefficient": 0.0499604,
+                     *           "bandgap": 1.121,
+                     *           "bandgapCoefficient": -0.0002677
+                     *         },
+                     *         "misfits": {
+                     *           "shortCircuitCurrent": 2.22045e-16,
+                     *           "openCircuitVoltage": 0,
+                     *           "maximumPowerCurrent": -2.22045e-16,
+                     *           "maximumPowerSlope": -7.59127e-16,
+                     *           "openCircuitVoltageCoefficient": -3.10862e-15
+                     *         }
+                     *       },
+                     *       "cautions": [
+                     *         {
+                     *           "code": "cold-voltage-not-checked",
+                     *           "severity": "warning",
+                     *           "detail": "No inputVoltageRating was given, so the open-circuit voltage of 42.8 V at 3.6 degC was not checked against it.",
+                     *           "values": {
+                     *             "temperature": 3.6,
+                     *             "openCircuitVoltage": 42.79,
+                     *             "moduleByCircuit": 41.2991,
+                     *             "moduleByCoefficient": 41.3141,
+                     *             "moduleByFactorTable": 42.79
+                     *           }
+                     *         },
+                     *         {
+                     *           "code": "series-cold-is-not-record-cold",
+                     *           "severity": "info",
+                     *           "detail": "The coldest temperature of the series, 3.6 degC, was taken; the site's record low is likely colder. Give recordLowTemperature.",
+                     *           "values": {
+                     *             "temperature": 3.6
+                     *           }
+                     *         },
+                     *         {
+                     *           "code": "open-circuit-at-each-sample",
+                     *           "severity": "warning",
+                     *           "detail": "The rule disconnects the array: its full open-circuit voltage stands at the input at each sample. Local codes and a licensed designer decide.",
+                     *           "values": {
+                     *             "openCircuitVoltage": 38.9
+                     *           }
+                     *         },
+                     *         {
+                     *           "code": "wind-assumed",
+                     *           "detail": "No wind speed was given: 1 m/s was taken throughout for the cell temperature.",
+                     *           "values": {
+                     *             "windSpeed": 1
+                     *           },
+                     *           "severity": "info"
+                     *         },
+                     *         {
+                     *           "code": "planning-estimate",
+                     *           "severity": "info",
+                     *           "detail": "Estimates for planning, not an electrical design. Photovoltaic strings are a shock, arc and fire hazard and cannot be switched off in daylight. Local codes and a licensed designer decide.",
+                     *           "values": {}
+                     *         }
+                     *       ],
+                     *       "provenance": {
+                     *         "version": "0.1.0",
+                     *         "models": [
+                     *           {
+                     *             "name": "datasheet-fit",
+                     *             "version": "1",
+                     *             "source": "De Soto, Klein & Beckman, Solar Energy 80 (2006) 78-88 (from memory), its five conditions"
+                     *           },
+                     *           {
+                     *             "name": "single-diode",
+                     *             "version": "1",
+                     *             "source": "De Soto, Klein & Beckman, Solar Energy 80 (2006) 78-88 (from memory), its translation to irradiance and temperature"
+                     *           },
+                     *           {
+                     *             "name": "cell-temperature-faiman",
+                     *             "version": "1",
+                     *             "source": "Faiman, Prog. Photovolt. 16 (2008) 307-315"
+                     *           },
+                     *           {
+                     *             "name": "fractional-open-circuit-voltage",
+                     *             "version": "1",
+                     *             "source": "Enslin, Wolf, Snyman & Swiegers, IEEE Trans. Ind. Electron. 44(6) (1997) 769-773 (fraction .76; from memory); Esram & Chapman, IEEE Trans. Energy Convers. 22(2) (2007) 439-449 (.71 to .78; from memory)"
+                     *           },
+                     *           {
+                     *             "name": "steady-tracking",
+                     *             "version": "1",
+                     *             "source": "own derivation: each sample at rest, the causes telescoping from available to delivered power"
+                     *           }
+                     *         ],
+                     *         "inputDigest": "28b5e924d4daa1c9da005eb24664bb5fd4515e6bd161d077e91e85e167476bf7"
+                     *       }
+                     *     }
+                     */
+                    "application/json": components["schemas"]["EstimateAnswer"];
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. `malformed-body`: Not UTF-8, not JSON, nested too deep, or not gzip. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unauthorized`: No key, or none that is known. */
+            401: {
+                headers: {
+                    "www-authenticate": components["headers"]["WwwAuthenticate"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-slow`: No byte of it arrived for a while, or it took too long as a whole. */
+            408: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            413: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            415: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-request`: Schema, relations or physics; every error says where and what would be right. `too-much-work`: Refused before starting, with the estimate and the limit. `time-limit-exceeded`: Stopped at the limit of computing time; the same request would end the same. */
+            422: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. `worker-lost`: The worker died or ran out of memory with this request; do not simply retry. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `overloaded`: The queue is full; nothing was begun. Retry after the time that Retry-After says. `draining`: Nothing was begun; another replica, or this one after its restart, will answer. */
+            503: {
+                headers: {
+                    "retry-after": components["headers"]["RetryAfter"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    rules: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The rules, in the order they are shown. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["RuleCatalogue"];
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unauthorized`: No key, or none that is known. */
+            401: {
+                headers: {
+                    "www-authenticate": components["headers"]["WwwAuthenticate"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    version: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Version and limits. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    /**
+                     * @example {
+                     *       "name": "kneegap",
+                     *       "version": "0.1.0",
+                     *       "limits": {
+                     *         "bodyBytes": 67108864,
+                     *         "samples": 600000,
+                     *         "candidates": 24,
+                     *         "controlPeriods": 200000000,
+                     *         "computeSeconds": 50
+                     *       }
+                     *     }
+                     */
+                    "application/json": components["schemas"]["VersionAnswer"];
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+}
