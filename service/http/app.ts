@@ -4,20 +4,25 @@ import { problem } from "../wire/problem.ts";
 import { checkAccept } from "./accept.ts";
 import { checkAccess } from "./access.ts";
 import type { App, Environment, RequestContext } from "./app-type.ts";
+import { createBodyBudget } from "./body-budget.ts";
 import { describeShared } from "./document.ts";
 import { respondProblem } from "./problem.ts";
 import { trackRequest } from "./request-track.ts";
 import { addComparisons } from "./routes/comparisons.ts";
+import { addCurves } from "./routes/curves.ts";
 import { addDocument } from "./routes/document.ts";
+import { addEfficiencyTests } from "./routes/efficiency-tests.ts";
 import { addEstimates } from "./routes/estimates.ts";
 import { addHealth } from "./routes/health.ts";
+import { addModuleFits } from "./routes/module-fits.ts";
 import { addRules } from "./routes/rules.ts";
+import { addTunings } from "./routes/tunings.ts";
 import { addVersion } from "./routes/version.ts";
 import type { AppSettings } from "./services.ts";
 
 /** The service as a function of requests: routes, refusals and document; testable without a port. */
 export function createApp(compute: Compute, settings: AppSettings): App {
-  const services = { ...settings, compute };
+  const services = { ...settings, compute, budget: createBodyBudget(settings.heldBytes) };
   const app: App = new OpenAPIHono<Environment>();
   app.use(trackRequest(services));
   app.use(checkAccept);
@@ -25,6 +30,10 @@ export function createApp(compute: Compute, settings: AppSettings): App {
   describeShared(app);
   addEstimates(app, services);
   addComparisons(app, services);
+  addTunings(app, services);
+  addEfficiencyTests(app, services);
+  addModuleFits(app, services);
+  addCurves(app, services);
   addRules(app);
   addHealth(app, services);
   addVersion(app, services);

@@ -38,10 +38,8 @@ export function documentText(app: App): string {
     info: {
       title: "kneegap",
       version: VERSION,
-      summary: "How much energy a photovoltaic converter's tracking rule leaves behind, and why.",
       description:
-        "Every POST is a pure function of its body: safe to retry, the same bytes on any replica. Requests are strict, answers are open: members may be added, enumerations may grow. Results are estimates for planning, not an electrical design; photovoltaic strings are a shock, arc and fire hazard and cannot be switched off in daylight. Follow local codes and leave the design to licensed practice.",
-      license: { name: "Proprietary", identifier: "LicenseRef-Proprietary" },
+        "How much energy a photovoltaic converter's tracking rule leaves behind, and why. Every POST is a pure function of its body: safe to retry, the same bytes on any replica. Requests are strict, answers are open: members may be added, enumerations may grow. Results are estimates for planning, not an electrical design; photovoltaic strings are a shock, arc and fire hazard and cannot be switched off in daylight. Follow local codes and leave the design to licensed practice.",
     },
     servers: [{ url: "/", description: "The service that serves this document." }],
     tags: [

@@ -38,6 +38,39 @@ export const COMPARISON_EXAMPLE = {
   energyValue: { currency: "EUR", perKilowattHour: 0.24 },
 };
 
+/** The request example of `fitModule`. */
+export const MODULE_FIT_EXAMPLE = { module: MODULE };
+
+/** The request example of `curve`. */
+export const CURVE_EXAMPLE = {
+  module: MODULE,
+  irradiance: 800,
+  cellTemperature: 45,
+  points: 9,
+  rules: [{ kind: "constant-voltage" }, { kind: "short-current-pulse" }],
+};
+
+/** The request example of `testEfficiency`. */
+export const EFFICIENCY_TEST_EXAMPLE = {
+  module: {
+    kind: "test-generator",
+    technology: "crystalline-silicon",
+    maximumPower: 1000,
+    maximumPowerVoltage: 100,
+  },
+  rule: { kind: "fractional-open-circuit-voltage", fraction: 0.8 },
+  test: "static",
+};
+
+/** The request example of `tune`. */
+export const TUNING_EXAMPLE = {
+  module: MODULE,
+  climate: CLIMATE,
+  rule: { kind: "fractional-open-circuit-voltage" },
+  parameter: "fraction",
+  range: { from: 0.7, to: 0.9 },
+};
+
 /**
  * What the service answers to an example, its numbers shortened to six digits so that the document reads well and does
  * not change with the last bits. Throws Error for an example that is refused.
@@ -46,6 +79,11 @@ export function exampleAnswer(operation: OperationName, request: object): unknow
   const answer = performOperation(operation, new TextEncoder().encode(JSON.stringify(request)), CEILINGS);
   if (!answer.ok) throw new Error(`the example of ${operation} is refused: ${answer.problem.detail}`);
   return JSON.parse(new TextDecoder().decode(answer.bytes), (_name, value: unknown) =>
-    typeof value === "number" ? Number(value.toPrecision(6)) : value,
+    typeof value === "number" ? shortened(value) : value,
   );
+}
+
+/** Six digits; what is only rounding left over becomes 0. */
+function shortened(value: number): number {
+  return Math.abs(value) < 1e-14 ? 0 : Number(value.toPrecision(6));
 }

@@ -3,30 +3,36 @@ import { gunzip } from "node:zlib";
 import type { Problem } from "../wire/problem.ts";
 import { problem } from "../wire/problem.ts";
 import type { RequestContext } from "./app-type.ts";
+import type { BodyBudget } from "./body-budget.ts";
 import type { Services } from "./services.ts";
 
 const decompress = promisify(gunzip);
 
-/** A body, or why there is none. */
-export type ReadBody = { ok: true; bytes: Uint8Array } | { ok: false; problem: Problem };
+/** A body and what it holds of the budget, to be released with its answer; or why there is none. */
+export type ReadBody = { ok: true; bytes: Uint8Array; held: number } | { ok: false; problem: Problem };
 
 const refuse = (of: Problem): ReadBody => ({ ok: false, problem: of });
 
-function tooLarge(limit: number): ReadBody {
-  return refuse(
-    problem("body-too-large", `The body is longer than ${limit} bytes, decompressed; send fewer samples at once.`),
-  );
+function tooLarge(limit: number): Problem {
+  return problem("body-too-large", `The body is longer than ${limit} bytes, decompressed; send fewer samples at once.`);
 }
+
+function tooSlow(idleTime: number, uploadTime: number): Problem {
+  return problem("too-slow", `No byte for ${idleTime / 1000} s, or no end after ${uploadTime / 1000} s.`);
+}
+
+const NO_ROOM = problem("overloaded", "Too many bodies are being read; this one was not.");
+const NOTHING = Promise.resolve({ done: true as const, value: undefined });
 
 /** Reads a JSON body, plain or gzip, within the limits of size and time; the size is checked while reading. */
 export async function readBody(context: RequestContext, services: Services): Promise<ReadBody> {
   const form = refuseForm(context);
   if (form !== null) return refuse(form);
   const limit = services.limits.bodyBytes;
-  if (Number(context.req.header("content-length") ?? 0) > limit) return tooLarge(limit);
+  if (Number(context.req.header("content-length") ?? 0) > limit) return refuse(tooLarge(limit));
   const read = await collect(context.req.raw.body, limit, services);
-  if (!read.ok || context.req.header("content-encoding") === undefined) return read;
-  return inflate(read.bytes, limit);
+  if (!read.ok || encodingOf(context) === "identity") return read;
+  return inflate(read, limit, services.budget);
 }
 
 /** Why the form of the body is none of ours; null when it is. */
@@ -36,45 +42,58 @@ function refuseForm(context: RequestContext): Problem | null {
   if (type.trim() !== "application/json" || (charset ?? "charset=utf-8").replaceAll('"', "") !== "charset=utf-8") {
     return problem("unsupported-media-type", "Send the body as content-type: application/json, in UTF-8.");
   }
-  const encoding = context.req.header("content-encoding")?.trim().toLowerCase() ?? "gzip";
-  if (encoding === "gzip") return null;
+  if (encodingOf(context) !== null) return null;
   return problem("unsupported-media-type", "The only content-encoding is gzip; leave the header out for a plain body.");
 }
 
-async function inflate(bytes: Uint8Array, limit: number): Promise<ReadBody> {
+/** How the body is encoded; null: in a way that is none of ours. */
+function encodingOf(context: RequestContext): "gzip" | "identity" | null {
+  const encoding = (context.req.header("content-encoding") ?? "identity").trim().toLowerCase();
+  return encoding === "gzip" || encoding === "identity" ? encoding : null;
+}
+
+/** Decompresses what was read; the budget holds the result in its place. */
+async function inflate(
+  read: { bytes: Uint8Array; held: number },
+  limit: number,
+  budget: BodyBudget,
+): Promise<ReadBody> {
   try {
-    return { ok: true, bytes: await decompress(bytes, { maxOutputLength: limit }) };
+    const bytes = await decompress(read.bytes, { maxOutputLength: limit });
+    if (budget.take(bytes.length)) return { ok: true, bytes, held: bytes.length };
+    return refuse(NO_ROOM);
   } catch (error) {
-    if ((error as NodeJS.ErrnoException).code === "ERR_BUFFER_TOO_LARGE") return tooLarge(limit);
+    if ((error as NodeJS.ErrnoException).code === "ERR_BUFFER_TOO_LARGE") return refuse(tooLarge(limit));
     return refuse(
       problem("malformed-body", "The content-encoding says gzip, but the body is not a whole gzip stream."),
     );
+  } finally {
+    budget.release(read.held);
   }
 }
 
-/** Gathers a stream's pieces; the stream is cancelled where a limit is passed. */
+/** Gathers a stream's pieces; the stream is cancelled where a limit is passed. What it holds is taken from the budget. */
 async function collect(
   stream: ReadableStream<Uint8Array> | null,
   limit: number,
-  { idleTime, uploadTime }: Services,
+  { idleTime, uploadTime, budget }: Services,
 ): Promise<ReadBody> {
-  if (stream === null) return { ok: true, bytes: new Uint8Array(0) };
-  const reader = stream.getReader();
   const pieces: Uint8Array[] = [];
   const end = performance.now() + uploadTime;
+  const reader = stream?.getReader();
+  const stop = (of: Problem, held: number): ReadBody => {
+    budget.release(held);
+    void reader?.cancel().catch(() => undefined);
+    return refuse(of);
+  };
   let length = 0;
   for (;;) {
-    const piece = await within(reader.read(), Math.min(idleTime, end - performance.now()));
-    if (piece === "late") {
-      void reader.cancel().catch(() => undefined);
-      return refuse(problem("too-slow", `No byte for ${idleTime / 1000} s, or no end after ${uploadTime / 1000} s.`));
-    }
-    if (piece.done) return { ok: true, bytes: joined(pieces, length) };
+    const piece = await within(reader?.read() ?? NOTHING, Math.min(idleTime, end - performance.now()));
+    if (piece === "late") return stop(tooSlow(idleTime, uploadTime), length);
+    if (piece.done) return { ok: true, bytes: joined(pieces, length), held: length };
+    if (length + piece.value.length > limit) return stop(tooLarge(limit), length);
+    if (!budget.take(piece.value.length)) return stop(NO_ROOM, length);
     length += piece.value.length;
-    if (length > limit) {
-      void reader.cancel().catch(() => undefined);
-      return tooLarge(limit);
-    }
     pieces.push(piece.value);
   }
 }

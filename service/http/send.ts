@@ -8,9 +8,11 @@ const compress = promisify(gzip);
 /** Shorter answers are not worth compressing, bytes. */
 const WORTH_COMPRESSING = 1024;
 
-/** Sends JSON bytes; gzip at level 1, off the main thread, where the caller asks for it. */
-export async function sendBytes(context: RequestContext, bytes: Uint8Array): Promise<Response> {
-  const headers: Record<string, string> = { "content-type": "application/json", vary: "accept-encoding" };
+const JSON_TYPE = "application/json";
+
+/** Sends bytes; gzip at level 1, off the main thread, where the caller asks for it. */
+export async function sendBytes(context: RequestContext, bytes: Uint8Array, type = JSON_TYPE): Promise<Response> {
+  const headers: Record<string, string> = { "content-type": type, vary: "accept-encoding" };
   const asked = weightOf(context.req.header("accept-encoding") ?? "", ["gzip", "*"]) ?? 0;
   if (asked === 0 || bytes.length < WORTH_COMPRESSING)
     return new Response(bytes as Uint8Array<ArrayBuffer>, { headers });

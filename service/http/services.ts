@@ -1,5 +1,6 @@
 import type { Compute } from "../pool/compute.ts";
 import type { Limits } from "../wire/limits.ts";
+import type { BodyBudget } from "./body-budget.ts";
 
 /** What the service says of itself: `warming` until the workers are warm, `draining` once it was told to stop. */
 export type ServiceState = "warming" | "ready" | "draining";
@@ -27,9 +28,12 @@ export interface AppSettings {
   idleTime: number;
   /** A body must have come whole after this, ms. */
   uploadTime: number;
+  /** All bodies together hold at most this, from their first byte until their answer, bytes. */
+  heldBytes: number;
 }
 
 /** What the routes work with. */
 export interface Services extends AppSettings {
   compute: Compute;
+  budget: BodyBudget;
 }

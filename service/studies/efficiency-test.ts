@@ -10,6 +10,7 @@ import type { EfficiencyBench } from "./efficiency-bench.ts";
 import type { BuiltModule, ModuleChoice } from "./module-choice.ts";
 import { buildModule } from "./module-choice.ts";
 import type { SequenceName } from "./ramp-sequence.ts";
+import { rampSequence, SEQUENCES } from "./ramp-sequence.ts";
 import { checkRule } from "./rule-relations.ts";
 import type { StaticEfficiency } from "./static-efficiency.ts";
 import { staticTest } from "./static-efficiency.ts";
@@ -38,6 +39,11 @@ export interface EfficiencyTestResult {
   dynamic: DynamicEfficiency | null;
   /** Null for a dynamic test. */
   static: StaticEfficiency | null;
+}
+
+/** Seconds that a dynamic test takes, all rows. */
+export function testDuration(test: SequenceName): number {
+  return SEQUENCES[test].rows.reduce((sum, row) => sum + rampSequence(test, row, Number.POSITIVE_INFINITY).duration, 0);
 }
 
 /** A rule's MPPT efficiency by the standard's sequences, on one module. @throws StudyError */

@@ -11,8 +11,10 @@ import { scaleBetween } from "./tuning-scale.ts";
 
 /** One site of a tuning: its own array, converter and climate. */
 export interface TuningSite extends TrackingRequest {
-  label: string;
+  id: string;
   converter: ConverterChoice;
+  /** Where the site's module and climate stand in the request. */
+  pointers: { module: string; climate: string };
 }
 
 /** Which numeric setting of a rule is sought, over one site or many. */
@@ -35,7 +37,7 @@ export interface LossAt {
 
 /** One site's own optimum, and what the common setting costs it. */
 export interface TunedSite {
-  label: string;
+  id: string;
   available: number;
   optimum: LossAt;
   atCommon: LossAt;
@@ -60,6 +62,7 @@ const FLAT = 1e-3;
 /** Values tried in one pass when closing in, and passes: each shortens the bracket fivefold. */
 const REFINED = 9;
 const ROUNDS = 7;
+const NO_TRACES = { maximum: false, operating: false, causes: false };
 
 /**
  * The value of a rule's setting that loses least over one site or many: a curve over the range, then the bracket around
@@ -90,8 +93,19 @@ export function tune(request: TuningRequest): TuningResult {
     optimum: at(common.value, common.lost, total),
     flatRange: flatRange(values, losses, common, FLAT * total),
     curve: values.map((value, k) => at(value, losses[k], total)),
-    sites: sites.map((site, k) => tuneSite(site, scale, values, common.value, (v, l) => at(v, l, available[k]))),
+    sites: sites.map((site, k) => {
+      const atSite = (value: number, lost: number): LossAt => at(value, lost, available[k]);
+      if (sites.length > 1) return tuneSite(site, scale, values, common.value, atSite);
+      const own = atSite(common.value, common.lost);
+      return { id: site.site.id, available: total, optimum: own, atCommon: own, regret: 0 };
+    }),
   };
+}
+
+/** Candidates that a site's tuning tracks, for foreseeing its work: the curve and the closing in, its own besides. */
+export function tuningCandidates(points: number, sites: number): number {
+  const once = points + REFINED * ROUNDS + 2;
+  return sites > 1 ? 2 * once : once;
 }
 
 /** The losses of one site at values of the setting. */
@@ -119,7 +133,20 @@ class SiteLosses {
       converter: this.site.converter,
       pointer: "/rule",
     }));
-    return runTracking(this.site, candidates, { maximum: false, operating: false, causes: false }).tracked;
+    return atSite(this.site, () => runTracking(this.site, candidates, NO_TRACES).tracked);
+  }
+}
+
+/** Does a site's work; what physics refuses is pointed at where the site's own members stand. */
+function atSite<T>({ pointers }: TuningSite, work: () => T): T {
+  try {
+    return work();
+  } catch (error) {
+    if (!(error instanceof StudyError)) throw error;
+    const pointer = error.pointer
+      .replace(/^\/module(?=\/|$)/, pointers.module)
+      .replace(/^\/climate(?=\/|$)/, pointers.climate);
+    throw new StudyError(error.code, pointer, error.message, error.expected);
   }
 }
 
@@ -135,7 +162,7 @@ function tuneSite(
   const atCommon = lost[values.length];
   const best = atCommon < own.lost ? { value: common, lost: atCommon } : own;
   return {
-    label: losses.site.label,
+    id: losses.site.id,
     available: losses.available,
     optimum: at(best.value, best.lost),
     atCommon: at(common, atCommon),
@@ -207,7 +234,7 @@ function tunedParameter({ sites, rule, parameter }: TuningRequest) {
     throw new StudyError("not-tunable", "/parameter", detail);
   }
   const [site] = sites;
-  const array = photovoltaicArray(buildModule(site.module).module, site.array);
+  const array = atSite(site, () => photovoltaicArray(buildModule(site.module).module, site.array));
   const ruleArray = { modulesInSeries: site.array.modulesInSeries, standard: array.standard };
   return { parameter, unit: declared.unit, today: completeSettings(rule, ruleArray)[parameter] as number };
 }

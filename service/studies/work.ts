@@ -2,12 +2,8 @@ import type { ClimateSeries } from "../climate/climate-series.ts";
 import { irradianceColumn, sampleCount } from "../climate/climate-series.ts";
 import type { RuleChoice } from "../core/rules/index.ts";
 import { ruleDefinition } from "../core/rules/index.ts";
-import { StudyError } from "./study-error.ts";
 import type { Candidate, Mode } from "./tracking-run.ts";
 import { resolveMode } from "./tracking-run.ts";
-
-/** Most work one request may ask for, in control periods: about 10 to 50 s on one core. */
-export const MOST_WORK = 200_000_000;
 
 /** Control periods that one lit sample at rest costs: one operating point, or an orbit followed from 64 starts. */
 const STEADY_COST = 10;
@@ -30,16 +26,10 @@ export function workOf(climate: ClimateSeries, mode: Mode, candidates: readonly 
   return work;
 }
 
-/** @throws StudyError `too-much-work` when a run would take more than `most` control periods */
-export function refuseTooMuch(work: number, most: number): void {
-  if (work <= most) return;
-  const [asked, limit] = [Math.round(work).toLocaleString("en"), most.toLocaleString("en")];
-  throw new StudyError(
-    "too-much-work",
-    "",
-    `This would take about ${asked} control periods, the limit is ${limit}: send fewer samples or candidates, a longer controlPeriod, or "mode": "steady".`,
-    `at most ${limit} control periods`,
-  );
+/** Work that rules at rest in one weather take, in control periods. */
+export function workOfSteady(rules: readonly RuleChoice[], converter: Candidate["converter"]): number {
+  const ripple = converter.rippleAmplitude > 0 ? RIPPLE_COST : 1;
+  return rules.reduce((work, rule) => work + ripple * steadyCost(rule), 0);
 }
 
 function litSamples(irradiance: Float64Array): number {
@@ -69,4 +59,9 @@ function steppedWork(rule: RuleChoice, seconds: number): number {
 function steadyCost(rule: RuleChoice): number {
   if (rule.kind === "incremental-conductance") return ORBIT_COST;
   return STEADY_COST + setting(rule, "points") + (setting(rule, "stepFraction") > 0 ? STEADY_COST : 0);
+}
+
+/** Work of `seconds` of light stepped by one rule, in control periods. */
+export function workOfStepping(rule: RuleChoice, converter: Candidate["converter"], seconds: number): number {
+  return (converter.rippleAmplitude > 0 ? RIPPLE_COST : 1) * steppedWork(rule, seconds);
 }

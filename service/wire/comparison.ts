@@ -1,7 +1,7 @@
 import type { z } from "@hono/zod-openapi";
-import { sampleCount } from "../climate/climate-series.ts";
 import type { ComparisonRequest } from "../studies/comparison.ts";
 import { compare } from "../studies/comparison.ts";
+import { workOf } from "../studies/work.ts";
 import { checkClimate, decodeClimate } from "./decode/climate.ts";
 import { checkConverter, decodeConverter } from "./decode/converter.ts";
 import { checkModule, decodeModule } from "./decode/module.ts";
@@ -9,6 +9,7 @@ import { nearestName } from "./decode/nearest-name.ts";
 import { decodeRule } from "./decode/rule.ts";
 import { defineOperation } from "./define-operation.ts";
 import { jsonText } from "./encode/byte-writer.ts";
+import { encodeCaution } from "./encode/caution.ts";
 import { encodeModule } from "./encode/module.ts";
 import { digestClimate, encodeProvenance } from "./encode/provenance.ts";
 import { encodeConverter, encodeRule } from "./encode/resolved.ts";
@@ -16,7 +17,6 @@ import type { Limits } from "./limits.ts";
 import type { Flaw } from "./problem.ts";
 import { ArraySchema } from "./schema/array.ts";
 import { ComparisonRequestSchema } from "./schema/comparison.ts";
-import { trackingWork } from "./work.ts";
 
 type Raw = z.output<typeof ComparisonRequestSchema>;
 
@@ -101,7 +101,14 @@ function answer(request: ComparisonRequest, raw: Raw): Uint8Array {
   });
   const module = encodeModule(run.built, request.module);
   const provenance = encodeProvenance(request, run, digested);
-  const body = { resolved, results: shown, coverage: run.coverage, module, cautions, provenance };
+  const body = {
+    resolved,
+    results: shown,
+    coverage: run.coverage,
+    module,
+    cautions: cautions.map(encodeCaution),
+    provenance,
+  };
   return new TextEncoder().encode(jsonText(body));
 }
 
@@ -110,6 +117,6 @@ export const comparisonOperation = defineOperation({
   schema: ComparisonRequestSchema,
   check,
   decode,
-  work: ({ candidates, array, climate }) => trackingWork(candidates, array, sampleCount(climate)),
+  work: ({ candidates, mode, climate }) => workOf(climate, mode, candidates),
   answer,
 });

@@ -2,19 +2,20 @@ import type { z } from "@hono/zod-openapi";
 import { sampleCount } from "../climate/climate-series.ts";
 import type { EstimateRequest } from "../studies/estimate.ts";
 import { estimate } from "../studies/estimate.ts";
+import { workOf } from "../studies/work.ts";
 import { checkClimate, decodeClimate } from "./decode/climate.ts";
 import { checkConverter, decodeConverter } from "./decode/converter.ts";
 import { checkModule, decodeModule } from "./decode/module.ts";
 import { decodeRule } from "./decode/rule.ts";
 import { defineOperation } from "./define-operation.ts";
 import { byteWriter, jsonText, written } from "./encode/byte-writer.ts";
+import { encodeCaution } from "./encode/caution.ts";
 import { encodeModule } from "./encode/module.ts";
 import { digestClimate, encodeProvenance } from "./encode/provenance.ts";
 import { encodeConverter, encodeRule } from "./encode/resolved.ts";
 import { writeTraces } from "./encode/traces.ts";
 import { ArraySchema } from "./schema/array.ts";
 import { EstimateRequestSchema } from "./schema/estimate.ts";
-import { trackingWork } from "./work.ts";
 
 type Raw = z.output<typeof EstimateRequestSchema>;
 
@@ -52,7 +53,7 @@ function answer(request: EstimateRequest, raw: Raw): Uint8Array {
   const writer = byteWriter(16_384 + (raw.traces === "none" ? 0 : 6 * TRACE_VALUE * sampleCount(request.climate)));
   const head = { resolved, energy, lostByCause, months, irradianceClasses, coverage: run.coverage };
   const provenance = encodeProvenance(request, run, digested);
-  const tail = { module: encodeModule(run.built, request.module), cautions, provenance };
+  const tail = { module: encodeModule(run.built, request.module), cautions: cautions.map(encodeCaution), provenance };
   writer.text(`${jsonText(head).slice(0, -1)},"traces":`);
   writeTraces(writer, run, view);
   writer.text(`,${jsonText(tail).slice(1)}`);
@@ -68,6 +69,6 @@ export const estimateOperation = defineOperation({
     ...checkClimate(raw.climate, limits),
   ],
   decode,
-  work: ({ candidate, array, climate }) => trackingWork([candidate], array, sampleCount(climate)),
+  work: ({ candidate, mode, climate }) => workOf(climate, mode, [candidate]),
   answer,
 });

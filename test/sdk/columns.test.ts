@@ -69,8 +69,8 @@ describe("a client with typed columns", () => {
     const typed = clientOf(server, { columns: "typed" }).client;
     expect(await plain.estimate(REQUEST)).toEqual(ANSWER);
     const { traces } = await typed.estimate(REQUEST);
-    expectTypeOf(traces!.operating.power).toEqualTypeOf<Float64Array>();
-    expect(traces!.operating.power).toEqual(Float64Array.of(1.25, Number.NaN));
+    expectTypeOf(traces!.operating!.power).toEqualTypeOf<Float64Array>();
+    expect(traces!.operating!.power).toEqual(Float64Array.of(1.25, Number.NaN));
     await plain.close();
     await typed.close();
   });

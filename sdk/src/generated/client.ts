@@ -2,7 +2,7 @@
 import type { ColumnKind, Received } from "../columns.ts";
 import type { CallOptions, RequestFunction } from "../operation.ts";
 import { operationTable } from "./operations.ts";
-import type { ComparisonAnswer, ComparisonRequest, EstimateAnswer, EstimateRequest, Health, RuleCatalogue, VersionAnswer, operations } from "./schema.ts";
+import type { ComparisonAnswer, ComparisonRequest, CurveAnswer, CurveRequest, EfficiencyTestAnswer, EfficiencyTestRequest, EstimateAnswer, EstimateRequest, Health, ModuleFitAnswer, ModuleFitRequest, RuleCatalogue, TuningAnswer, TuningRequest, VersionAnswer, operations } from "./schema.ts";
 
 /** The operations of the service, one method each. `C` says how columns arrive. */
 export class Operations<C extends ColumnKind> {
@@ -26,6 +26,18 @@ export class Operations<C extends ColumnKind> {
   }
 
   /**
+   * Draw the I-V and P-V curve
+   *
+   * The curve of an array in one weather as its converter sees it, every peak, and where each given rule sits at
+   * rest with what it loses and why.
+   *
+   * `POST /v1/curves`
+   */
+  curve(request: CurveRequest, options?: CallOptions): Promise<Received<CurveAnswer, C>> {
+    return this.#request(operationTable.curve, request, options) as Promise<Received<CurveAnswer, C>>;
+  }
+
+  /**
    * Read this document
    *
    * The OpenAPI 3.1 document of this version.
@@ -46,6 +58,19 @@ export class Operations<C extends ColumnKind> {
    */
   estimate(request: EstimateRequest, options?: CallOptions): Promise<Received<EstimateAnswer, C>> {
     return this.#request(operationTable.estimate, request, options) as Promise<Received<EstimateAnswer, C>>;
+  }
+
+  /**
+   * Find a module's circuit
+   *
+   * From a datasheet or from measured I-V points to the single-diode circuit, which can be sent back as a module,
+   * and how well it fits. A datasheet that no circuit meets gets the nearest one, or is refused with every misfit
+   * shown.
+   *
+   * `POST /v1/module-fits`
+   */
+  fitModule(request: ModuleFitRequest, options?: CallOptions): Promise<Received<ModuleFitAnswer, C>> {
+    return this.#request(operationTable.fitModule, request, options) as Promise<Received<ModuleFitAnswer, C>>;
   }
 
   /**
@@ -79,6 +104,31 @@ export class Operations<C extends ColumnKind> {
    */
   rules(options?: CallOptions): Promise<Received<RuleCatalogue, C>> {
     return this.#request(operationTable.rules, undefined, options) as Promise<Received<RuleCatalogue, C>>;
+  }
+
+  /**
+   * Test a rule's MPPT efficiency by the standard
+   *
+   * The dynamic sequences and the static levels of EN 50530:2010 (from memory; their durations close) for any rule
+   * on any module, by cause, and on request the course of one row.
+   *
+   * `POST /v1/efficiency-tests`
+   */
+  testEfficiency(request: EfficiencyTestRequest, options?: CallOptions): Promise<Received<EfficiencyTestAnswer, C>> {
+    return this.#request(operationTable.testEfficiency, request, options) as Promise<Received<EfficiencyTestAnswer, C>>;
+  }
+
+  /**
+   * Find the setting that loses least
+   *
+   * The best value of one numeric setting of a rule, the loss around it, the range in which it hardly matters, and
+   * what the setting of today loses. With several sites: the best common setting, each site's own, and what the
+   * common one costs it.
+   *
+   * `POST /v1/tunings`
+   */
+  tune(request: TuningRequest, options?: CallOptions): Promise<Received<TuningAnswer, C>> {
+    return this.#request(operationTable.tune, request, options) as Promise<Received<TuningAnswer, C>>;
   }
 
   /**

@@ -82,6 +82,46 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/v1/curves": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Draw the I-V and P-V curve
+         * @description The curve of an array in one weather as its converter sees it, every peak, and where each given rule sits at rest with what it loses and why.
+         */
+        post: operations["curve"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/v1/efficiency-tests": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Test a rule's MPPT efficiency by the standard
+         * @description The dynamic sequences and the static levels of EN 50530:2010 (from memory; their durations close) for any rule on any module, by cause, and on request the course of one row.
+         */
+        post: operations["testEfficiency"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
     "/v1/estimates": {
         parameters: {
             query?: never;
@@ -102,6 +142,26 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/v1/module-fits": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Find a module's circuit
+         * @description From a datasheet or from measured I-V points to the single-diode circuit, which can be sent back as a module, and how well it fits. A datasheet that no circuit meets gets the nearest one, or is refused with every misfit shown.
+         */
+        post: operations["fitModule"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
     "/v1/rules": {
         parameters: {
             query?: never;
@@ -116,6 +176,26 @@ export interface paths {
         get: operations["rules"];
         put?: never;
         post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/v1/tunings": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Find the setting that loses least
+         * @description The best value of one numeric setting of a rule, the loss around it, the range in which it hardly matters, and what the setting of today loses. With several sites: the best common setting, each site's own, and what the common one costs it.
+         */
+        post: operations["tune"];
         delete?: never;
         options?: never;
         head?: never;
@@ -154,6 +234,11 @@ export interface components {
              */
             kind: "ambient";
             model?: components["schemas"]["CellTemperatureModel"];
+            /**
+             * @description Time constant of the modules' heat, followed below a step of 600 s; 0: none. Unit: s.
+             * @default 0
+             */
+            thermalLag?: number;
             /** @description Temperature of the air. Unit: degC. */
             values: Column;
             /** @description Wind speed; left out, 1 m/s is taken and a caution says so. Unit: m/s. */
@@ -281,11 +366,10 @@ export interface components {
         /** @description Equally spaced samples of irradiance and temperature; columns of equal length. */
         Climate: {
             /**
-             * @description What happens to missing samples (null): the request is refused, or they are left out.
+             * @description What happens to missing samples (null): the request is refused, they are left out of every sum, or gaps up to a length are filled along a straight line.
              * @default refuse
-             * @enum {string}
              */
-            gaps?: "refuse" | "skip";
+            gaps?: ("refuse" | "skip") | components["schemas"]["InterpolateGaps"];
             irradiance: components["schemas"]["Irradiance"];
             /**
              * @description Start of the first sample, ISO 8601 with offset from UTC; months follow this clock.
@@ -428,6 +512,54 @@ export interface components {
             /** @description Samples that count. Unit: 1. */
             used: number;
         };
+        /** @description The I-V and P-V curve and where each rule sits on it. */
+        CurveAnswer: {
+            /** @description Current at each voltage. Unit: A. */
+            current?: (number | null)[];
+            module: components["schemas"]["ModuleAnswer"];
+            /** @description Voltage at no current. Unit: V. */
+            openCircuitVoltage: number;
+            /** @description Every peak of the power curve, the highest first. */
+            peaks: components["schemas"]["CurvePoint"][];
+            /** @description One for each rule, in the order of the request. */
+            places: components["schemas"]["RulePlace"][];
+            /** @description Power at each voltage. Unit: W. */
+            power?: (number | null)[];
+            provenance: components["schemas"]["Provenance"];
+            /** @description Current at 0 V, behind the wiring. Unit: A. */
+            shortCircuitCurrent: number;
+            /** @description From 0 to open circuit, equally spaced. Unit: V. */
+            voltage?: (number | null)[];
+        };
+        /** @description A point of the curve. */
+        CurvePoint: {
+            /** @description Current. Unit: A. */
+            current: number;
+            /** @description Power. Unit: W. */
+            power: number;
+            /** @description Voltage at the converter's terminals. Unit: V. */
+            voltage: number;
+        };
+        /** @description One array in one weather. */
+        CurveRequest: {
+            array?: components["schemas"]["ArrayLayout"];
+            /** @description Cell temperature. Unit: degC. */
+            cellTemperature: number;
+            converter?: components["schemas"]["Converter"];
+            /** @description Irradiance on the plane of the modules. Unit: W/m2. */
+            irradiance: number;
+            module: components["schemas"]["Module"];
+            /**
+             * @description Points of the curve. Unit: 1.
+             * @default 101
+             */
+            points?: number;
+            /**
+             * @description Rules whose place on the curve is wanted, at rest.
+             * @default []
+             */
+            rules?: components["schemas"]["Rule"][];
+        };
         /** @description A module as its datasheet prints it, at 1000 W/m2 and 25 degC. */
         DatasheetModule: {
             /**
@@ -459,6 +591,81 @@ export interface components {
             shortCircuitCurrent: number;
             /** @description Change of the short-circuit current with temperature. Unit: %/K. */
             shortCircuitCurrentCoefficient: number;
+        };
+        /** @description One level of the static test. */
+        EfficiencyLevel: {
+            /** @description Delivered over available power at rest. Unit: 1. */
+            efficiency: number;
+            /** @description At which the module gives that power. Unit: W/m2. */
+            irradiance: number;
+            /** @description Share of the maximum power at 1000 W/m2. Unit: 1. */
+            level: number;
+            lostByCause: components["schemas"]["LostByCause"] & unknown;
+        };
+        /** @description One row of a dynamic test. */
+        EfficiencyRow: {
+            /** @description With 300 s of settling, which does not count. Unit: s. */
+            duration: number;
+            /** @description Delivered over available energy. Unit: 1. */
+            efficiency: number;
+            lostByCause: components["schemas"]["LostByCause"] & unknown;
+            /** @description How often up and down. Unit: 1. */
+            repetitions: number;
+            /** @description Slope of the ramps. Unit: W/m2/s. */
+            slope: number;
+        };
+        /** @description A rule's MPPT efficiency by the standard's test. */
+        EfficiencyTestAnswer: {
+            /** @description By the CEC weights; null for a dynamic test. Unit: 1. */
+            cecWeighted: number | null;
+            /** @description Of all rows; null for the static test. Unit: s. */
+            duration: number | null;
+            /** @description The edition whose sequences and weights were used. */
+            edition: string;
+            /** @description Unweighted mean of the rows; null for the static test. Unit: 1. */
+            efficiency: number | null;
+            /** @description By the European weights; null for a dynamic test. Unit: 1. */
+            europeanWeighted: number | null;
+            /** @description Null for a dynamic test. */
+            levels: components["schemas"]["EfficiencyLevel"][] | null;
+            module: components["schemas"]["ModuleAnswer"];
+            provenance: components["schemas"]["Provenance"];
+            resolved: components["schemas"]["ResolvedEfficiencyTest"];
+            /** @description Null for the static test. */
+            rows: components["schemas"]["EfficiencyRow"][] | null;
+            test: string;
+            trace: components["schemas"]["RowTrace"];
+        };
+        /** @description One module, one rule, one of the standard's tests. */
+        EfficiencyTestRequest: {
+            /**
+             * @description Cell temperature, constant. Unit: degC.
+             * @default 25
+             */
+            cellTemperature?: number;
+            converter?: components["schemas"]["Converter"];
+            module: components["schemas"]["Module"];
+            rule: components["schemas"]["Rule"];
+            /**
+             * @description Null: the cells keep cellTemperature, as in the standard.
+             * @default null
+             */
+            temperatureLag?: {
+                /** @description Rise of the cells over cellTemperature at rest under 1000 W/m2. Unit: K. */
+                rise: number;
+                /** @description Time constant of the first-order lag. Unit: s. */
+                timeConstant: number;
+            } | null;
+            /**
+             * @description A dynamic sequence of ramps, the start-up ramp, or the static levels.
+             * @enum {string}
+             */
+            test: "dynamic-100-500" | "dynamic-300-1000" | "start-up" | "static";
+            /**
+             * @description Slope of the row whose course is wanted; null: none. Unit: W/m2/s.
+             * @default null
+             */
+            traceSlope?: number | null;
         };
         /** @description Energies over the whole climate. */
         Energy: {
@@ -550,6 +757,13 @@ export interface components {
              */
             windHeatLoss?: number;
         };
+        /** @description Around the optimum, within 0.1 points of its lost fraction. */
+        FlatRange: {
+            /** @description Lower end. Unit: that of the setting. */
+            from: number;
+            /** @description Upper end. Unit: that of the setting. */
+            to: number;
+        };
         /**
          * Fractional open-circuit voltage
          * @description Disconnects the array each sample period, reads its open-circuit voltage and holds a fraction of it until the next sample.
@@ -596,6 +810,27 @@ export interface components {
             /** @description live or ready. */
             status: string;
         };
+        /** @description Irradiance as weather stations have it: global alone (its diffuse part by Erbs et al. 1982), or any two of the three; the plane of the modules is computed. */
+        HorizontalIrradiance: {
+            /** @description Diffuse irradiance on the horizontal. Unit: W/m2. */
+            diffuse?: Column;
+            /** @description Direct irradiance facing the sun. Unit: W/m2. */
+            directNormal?: Column;
+            /** @description Global irradiance on the horizontal. Unit: W/m2. */
+            global?: Column;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "horizontal";
+            site: components["schemas"]["Site"];
+            /**
+             * @description How the sky's light is spread: Perez et al. 1990, Hay & Davies 1980, Liu & Jordan 1963.
+             * @default perez
+             * @enum {string}
+             */
+            skyModel?: "perez" | "hay-davies" | "isotropic";
+        };
         /**
          * Incremental conductance
          * @description Compares dI/dV with -I/V, whose equality marks the peak; rests inside a tolerance and wakes when the current moves.
@@ -624,8 +859,13 @@ export interface components {
              */
             stepFraction?: number;
         };
+        /** @description Short gaps are filled along a straight line. */
+        InterpolateGaps: {
+            /** @description Longest gap that is filled; longer ones are left out. Unit: s. */
+            interpolateUpTo: number;
+        };
         /** @description The light of a climate. */
-        Irradiance: components["schemas"]["PlaneOfArrayIrradiance"];
+        Irradiance: components["schemas"]["PlaneOfArrayIrradiance"] | components["schemas"]["HorizontalIrradiance"];
         /** @description The samples of one class of irradiance. */
         IrradianceClass: {
             /** @description What the array could have given. Unit: kWh. */
@@ -670,6 +910,15 @@ export interface components {
             /** @description Most samples of a climate. Unit: 1. */
             samples: number;
         };
+        /** @description The setting as sent, or its default at the first site. */
+        LossAt: {
+            /** @description Lost energy at it. Unit: kWh. */
+            lost: number;
+            /** @description Lost over available; null when nothing was available. Unit: 1. */
+            lostFraction: number | null;
+            /** @description Value of the setting. Unit: that of the setting. */
+            value: number;
+        };
         /** @description Lost energy by cause; the six add up to what is lost. One may be negative. */
         LostByCause: {
             /** @description The reference is stale: held from the last sample. Unit: kWh. */
@@ -684,6 +933,52 @@ export interface components {
             voltageWindow: number;
             /** @description The rule sits on a lower peak of the power curve. Unit: kWh. */
             wrongPeak: number;
+        };
+        /** @description Null for a datasheet. */
+        MeasuredCircuit: {
+            /** @description n Ns k T/q of the whole module. Unit: V. */
+            idealityVoltage: number;
+            /** @description Photocurrent. Unit: A. */
+            photocurrent: number;
+            /** @description Saturation current. Unit: A. */
+            saturationCurrent: number;
+            /** @description Series resistance. Unit: ohm. */
+            seriesResistance: number;
+            /** @description Shunt resistance; null: infinite. Unit: ohm. */
+            shuntResistance: number | null;
+        } | null;
+        /** @description Points of a measured I-V curve of one module. */
+        MeasuredCurve: {
+            /**
+             * @description Band gap of the cells at 25 degC; silicon by default. Unit: eV.
+             * @default 1.121
+             */
+            bandgap?: number;
+            /**
+             * @description Relative change of the band gap; silicon by default. Unit: 1/K.
+             * @default -0.0002677
+             */
+            bandgapCoefficient?: number;
+            /** @description Cells in series inside the module. Unit: 1. */
+            cellsInSeries: number;
+            /** @description Cell temperature during the measurement. Unit: degC. */
+            cellTemperature: number;
+            /** @description Current, positive while the module delivers, point by point. Unit: A. */
+            current: Column;
+            /** @description Irradiance during the measurement. Unit: W/m2. */
+            irradiance: number;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "measured-curve";
+            /**
+             * @description Change of the photocurrent with temperature. Unit: %/K.
+             * @default 0
+             */
+            photocurrentCoefficient?: number;
+            /** @description Terminal voltage, point by point. Unit: V. */
+            voltage: Column;
         };
         /** @description Null where no datasheet was fitted. */
         Misfits: {
@@ -714,6 +1009,24 @@ export interface components {
             fit: string;
             misfits: components["schemas"]["Misfits"];
         };
+        /** @description The circuit of a module and how well it fits. */
+        ModuleFitAnswer: {
+            circuit: components["schemas"]["Circuit"] & unknown;
+            /** @description exact, nearest (within 2 % of every condition), or measured. */
+            fit: string;
+            measured: components["schemas"]["MeasuredCircuit"];
+            misfits: components["schemas"]["Misfits"] & unknown;
+            provenance: components["schemas"]["Provenance"];
+            /** @description Of model current minus measured current; null for a datasheet. Unit: A. */
+            rootMeanSquareError: number | null;
+            standard: components["schemas"]["StandardPoint"];
+        };
+        /** @description A module whose circuit is sought. */
+        ModuleFitRequest: {
+            module: components["schemas"]["ModuleToFit"];
+        };
+        /** @description What is known of the module. */
+        ModuleToFit: components["schemas"]["DatasheetModule"] | components["schemas"]["MeasuredCurve"];
         /** @description One calendar month. */
         Month: {
             /** @description What the array could have given. Unit: kWh. */
@@ -947,6 +1260,11 @@ export interface components {
             /** @description Asleep while the array could give less. Unit: W. */
             wakePower: number;
         };
+        /** @description What was computed, every default filled in. */
+        ResolvedEfficiencyTest: {
+            converter: components["schemas"]["ResolvedConverter"];
+            rule: components["schemas"]["ResolvedRule"];
+        };
         /** @description Null when not given. */
         ResolvedEnergyValue: {
             currency: string;
@@ -1093,6 +1411,25 @@ export interface components {
             /** @description Step of the array voltage at each decision; 0 holds the target exactly, more makes the voltage hunt. Unit: 1, of the open-circuit voltage at standard test conditions. */
             stepFraction: number;
         };
+        /** @description Null where no row was asked for. */
+        RowTrace: {
+            /** @description At the start of each span; straight between. The first 300 s settle. Unit: W/m2. */
+            irradiance?: (number | null)[];
+            /** @description Least delivered by a control period in each span. Unit: W. */
+            leastPower?: (number | null)[];
+            /** @description Least of the control periods in each span. Unit: V. */
+            leastVoltage?: (number | null)[];
+            maximumPower: components["schemas"]["PointTrace"];
+            /** @description Most delivered by a control period in each span. Unit: W. */
+            mostPower?: (number | null)[];
+            /** @description Most of the control periods in each span. Unit: V. */
+            mostVoltage?: (number | null)[];
+            operating: components["schemas"]["PointTrace"];
+            /** @description Of the row shown. Unit: W/m2/s. */
+            slope: number;
+            /** @description Length of one span, at most 1 s. Unit: s. */
+            step: number;
+        } | null;
         /** @description How the converter decides the array voltage, with the rule's settings. */
         Rule: components["schemas"]["PerfectRule"] | components["schemas"]["ConstantVoltageRule"] | components["schemas"]["TemperatureCompensatedVoltageRule"] | components["schemas"]["FractionalOpenCircuitVoltageRule"] | components["schemas"]["ShortCurrentPulseRule"] | components["schemas"]["BatteryCoupledRule"] | components["schemas"]["PerturbAndObserveRule"] | components["schemas"]["IncrementalConductanceRule"] | components["schemas"]["PowerCurveScanRule"];
         /** @description Every tracking rule with its parameters. */
@@ -1136,6 +1473,19 @@ export interface components {
             /** @description Null for flags and choices. */
             unit: string | null;
             usual: components["schemas"]["UsualRange"];
+        };
+        /** @description Where a rule sits at rest. */
+        RulePlace: {
+            /** @description Mean current, interruptions counted. Unit: A. */
+            current: number;
+            /** @description What it leaves of the maximum. Unit: W. */
+            lost: number;
+            lostByCause: components["schemas"]["LostByCause"] & unknown;
+            /** @description Mean power delivered, interruptions counted. Unit: W. */
+            power: number;
+            rule: components["schemas"]["ResolvedRule"];
+            /** @description Mean voltage it holds at rest. Unit: V. */
+            voltage: number;
         };
         /** @description Errors of the converter's sensors; none by default. */
         SensorError: {
@@ -1249,6 +1599,42 @@ export interface components {
             /** @description Shunt resistance of the module at 1000 W/m2; null: infinite. Unit: ohm. */
             shuntResistance: number | null;
         };
+        /** @description Where the modules stand and how their plane lies. */
+        Site: {
+            /**
+             * @description Share of the light that the ground throws back. Unit: 1.
+             * @default 0.2
+             */
+            albedo?: number;
+            /** @description Of the modules' plane, clockwise from north: 180 faces south. Unit: degrees. */
+            azimuth: number;
+            /**
+             * @description Above sea level. Unit: m.
+             * @default 0
+             */
+            elevation?: number;
+            /** @description North positive. Unit: degrees. */
+            latitude: number;
+            /** @description East positive. Unit: degrees. */
+            longitude: number;
+            /** @description Of the modules' plane from the horizontal. Unit: degrees. */
+            tilt: number;
+        };
+        /** @description The fitted circuit at 1000 W/m2 and 25 degC. */
+        StandardPoint: {
+            /** @description Maximum power. Unit: W. */
+            maximumPower: number;
+            /** @description Current at maximum power. Unit: A. */
+            maximumPowerCurrent: number;
+            /** @description Voltage at maximum power. Unit: V. */
+            maximumPowerVoltage: number;
+            /** @description Open-circuit voltage. Unit: V. */
+            openCircuitVoltage: number;
+            /** @description Change of the open-circuit voltage over 10 K. Unit: %/K. */
+            openCircuitVoltageCoefficient: number;
+            /** @description Short-circuit current. Unit: A. */
+            shortCircuitCurrent: number;
+        };
         /** @description The temperature of a climate. */
         Temperature: components["schemas"]["CellTemperature"] | components["schemas"]["AmbientTemperature"];
         /**
@@ -1303,6 +1689,78 @@ export interface components {
             /** @description Time from one sample to the next. Unit: s. */
             step: number;
         } | null;
+        /** @description One site's own optimum and what the common setting costs it. */
+        TunedSite: {
+            atCommon: components["schemas"]["LossAt"] & unknown;
+            /** @description What the site's array could have given. Unit: kWh. */
+            available: number;
+            id: string;
+            optimum: components["schemas"]["LossAt"] & unknown;
+            /** @description Lost by the common setting beyond the site's own. Unit: kWh. */
+            regret: number;
+        };
+        /** @description The best setting, the loss around it, and each site's own. */
+        TuningAnswer: {
+            /** @description The loss over the range. */
+            curve: (components["schemas"]["LossAt"] & unknown)[];
+            flatRange: components["schemas"]["FlatRange"];
+            mode: string;
+            optimum: components["schemas"]["LossAt"] & unknown;
+            parameter: string;
+            provenance: components["schemas"]["Provenance"];
+            sites: components["schemas"]["TunedSite"][];
+            today: components["schemas"]["LossAt"];
+            /** @description Of the setting. */
+            unit: string;
+        };
+        /** @description A rule's setting that is to lose least. */
+        TuningRequest: {
+            array?: components["schemas"]["ArrayLayout"];
+            climate?: components["schemas"]["Climate"];
+            converter?: components["schemas"]["Converter"];
+            /**
+             * @description steady: each sample at rest. stepped: every rule at its own control period. auto: stepped up to a step of 300 s, steady above; the answer says which and why.
+             * @default auto
+             * @enum {string}
+             */
+            mode?: "auto" | "steady" | "stepped";
+            module?: components["schemas"]["Module"];
+            /**
+             * @description The rule's numeric setting to tune.
+             * @example fraction
+             */
+            parameter: string;
+            /**
+             * @description Points of the loss curve. Unit: 1.
+             * @default 41
+             */
+            points?: number;
+            /**
+             * @description Null: half as wide again as what is usual for the setting.
+             * @default null
+             */
+            range?: {
+                /** @description Lowest value tried. Unit: that of the setting. */
+                from: number;
+                /** @description Highest value tried. Unit: that of the setting. */
+                to: number;
+            } | null;
+            rule: components["schemas"]["Rule"];
+            /** @description Up to 100 sites that share one setting; left out, the request itself is the one site. */
+            sites?: components["schemas"]["TuningSite"][];
+        };
+        /** @description One site; what it leaves out it has from the request. */
+        TuningSite: {
+            array?: components["schemas"]["ArrayLayout"];
+            climate?: components["schemas"]["Climate"];
+            converter?: components["schemas"]["Converter"];
+            /**
+             * @description Name of the site in the answer.
+             * @example Heron Bank
+             */
+            id: string;
+            module?: components["schemas"]["Module"];
+        };
         /** @description What is usual in the field. */
         UsualRange: {
             /** @description Lower end. Unit: that of the parameter. */
@@ -1352,24 +1810,40 @@ export type ComparisonRequest = components['schemas']['ComparisonRequest'];
 export type ConstantVoltageRule = components['schemas']['ConstantVoltageRule'];
 export type Converter = components['schemas']['Converter'];
 export type Coverage = components['schemas']['Coverage'];
+export type CurveAnswer = components['schemas']['CurveAnswer'];
+export type CurvePoint = components['schemas']['CurvePoint'];
+export type CurveRequest = components['schemas']['CurveRequest'];
 export type DatasheetModule = components['schemas']['DatasheetModule'];
+export type EfficiencyLevel = components['schemas']['EfficiencyLevel'];
+export type EfficiencyRow = components['schemas']['EfficiencyRow'];
+export type EfficiencyTestAnswer = components['schemas']['EfficiencyTestAnswer'];
+export type EfficiencyTestRequest = components['schemas']['EfficiencyTestRequest'];
 export type Energy = components['schemas']['Energy'];
 export type EnergyValue = components['schemas']['EnergyValue'];
 export type EstimateAnswer = components['schemas']['EstimateAnswer'];
 export type EstimateRequest = components['schemas']['EstimateRequest'];
 export type FaimanModel = components['schemas']['FaimanModel'];
+export type FlatRange = components['schemas']['FlatRange'];
 export type FractionalOpenCircuitVoltageRule = components['schemas']['FractionalOpenCircuitVoltageRule'];
 export type Health = components['schemas']['Health'];
+export type HorizontalIrradiance = components['schemas']['HorizontalIrradiance'];
 export type IncrementalConductanceRule = components['schemas']['IncrementalConductanceRule'];
+export type InterpolateGaps = components['schemas']['InterpolateGaps'];
 export type Irradiance = components['schemas']['Irradiance'];
 export type IrradianceClass = components['schemas']['IrradianceClass'];
 export type KingModel = components['schemas']['KingModel'];
 export type LimitsInForce = components['schemas']['LimitsInForce'];
+export type LossAt = components['schemas']['LossAt'];
 export type LostByCause = components['schemas']['LostByCause'];
+export type MeasuredCircuit = components['schemas']['MeasuredCircuit'];
+export type MeasuredCurve = components['schemas']['MeasuredCurve'];
 export type Misfits = components['schemas']['Misfits'];
 export type Model = components['schemas']['Model'];
 export type Module = components['schemas']['Module'];
 export type ModuleAnswer = components['schemas']['ModuleAnswer'];
+export type ModuleFitAnswer = components['schemas']['ModuleFitAnswer'];
+export type ModuleFitRequest = components['schemas']['ModuleFitRequest'];
+export type ModuleToFit = components['schemas']['ModuleToFit'];
 export type Month = components['schemas']['Month'];
 export type NoctModel = components['schemas']['NoctModel'];
 export type PerfectRule = components['schemas']['PerfectRule'];
@@ -1386,6 +1860,7 @@ export type ResolvedCandidate = components['schemas']['ResolvedCandidate'];
 export type ResolvedComparison = components['schemas']['ResolvedComparison'];
 export type ResolvedConstantVoltageRule = components['schemas']['ResolvedConstantVoltageRule'];
 export type ResolvedConverter = components['schemas']['ResolvedConverter'];
+export type ResolvedEfficiencyTest = components['schemas']['ResolvedEfficiencyTest'];
 export type ResolvedEnergyValue = components['schemas']['ResolvedEnergyValue'];
 export type ResolvedEstimate = components['schemas']['ResolvedEstimate'];
 export type ResolvedFractionalOpenCircuitVoltageRule = components['schemas']['ResolvedFractionalOpenCircuitVoltageRule'];
@@ -1398,18 +1873,26 @@ export type ResolvedSensorError = components['schemas']['ResolvedSensorError'];
 export type ResolvedSensorResolution = components['schemas']['ResolvedSensorResolution'];
 export type ResolvedShortCurrentPulseRule = components['schemas']['ResolvedShortCurrentPulseRule'];
 export type ResolvedTemperatureCompensatedVoltageRule = components['schemas']['ResolvedTemperatureCompensatedVoltageRule'];
+export type RowTrace = components['schemas']['RowTrace'];
 export type Rule = components['schemas']['Rule'];
 export type RuleCatalogue = components['schemas']['RuleCatalogue'];
 export type RuleDescription = components['schemas']['RuleDescription'];
 export type RuleParameter = components['schemas']['RuleParameter'];
+export type RulePlace = components['schemas']['RulePlace'];
 export type SensorError = components['schemas']['SensorError'];
 export type SensorResolution = components['schemas']['SensorResolution'];
 export type ShortCurrentPulseRule = components['schemas']['ShortCurrentPulseRule'];
 export type SingleDiodeModule = components['schemas']['SingleDiodeModule'];
+export type Site = components['schemas']['Site'];
+export type StandardPoint = components['schemas']['StandardPoint'];
 export type Temperature = components['schemas']['Temperature'];
 export type TemperatureCompensatedVoltageRule = components['schemas']['TemperatureCompensatedVoltageRule'];
 export type TestGeneratorModule = components['schemas']['TestGeneratorModule'];
 export type Traces = components['schemas']['Traces'];
+export type TunedSite = components['schemas']['TunedSite'];
+export type TuningAnswer = components['schemas']['TuningAnswer'];
+export type TuningRequest = components['schemas']['TuningRequest'];
+export type TuningSite = components['schemas']['TuningSite'];
 export type UsualRange = components['schemas']['UsualRange'];
 export type VersionAnswer = components['schemas']['VersionAnswer'];
 export type ParameterRequestId = components['parameters']['RequestId'];
@@ -1907,11 +2390,11 @@ export interface operations {
                      *           "bandgapCoefficient": -0.0002677
                      *         },
                      *         "misfits": {
-                     *           "shortCircuitCurrent": 2.22045e-16,
+                     *           "shortCircuitCurrent": 0,
                      *           "openCircuitVoltage": 0,
-                     *           "maximumPowerCurrent": -2.22045e-16,
-                     *           "maximumPowerSlope": -7.59127e-16,
-                     *           "openCircuitVoltageCoefficient": -3.10862e-15
+                     *           "maximumPowerCurrent": 0,
+                     *           "maximumPowerSlope": 0,
+                     *           "openCircuitVoltageCoefficient": 0
                      *         }
                      *       },
                      *       "cautions": [
@@ -1937,11 +2420,11 @@ export interface operations {
                      *         },
                      *         {
                      *           "code": "wind-assumed",
+                     *           "severity": "info",
                      *           "detail": "No wind speed was given: 1 m/s was taken throughout for the cell temperature.",
                      *           "values": {
                      *             "windSpeed": 1
-                     *           },
-                     *           "severity": "info"
+                     *           }
                      *         },
                      *         {
                      *           "code": "planning-estimate",
@@ -1984,11 +2467,646 @@ export interface operations {
                      *             "source": "own derivation: each sample at rest, the causes telescoping from available to delivered power"
                      *           }
                      *         ],
-                     *         "inputDigest": "e6db862a7a04e886ea65c9d7ae15dedb74eeeb7290203c9980f6aa4bb5787f59"
+                     *         "inputDigest": "f52bde3c748759fa1547278c632b047692d4c37fa12737c6b8b787dd202226c0"
                      *       }
                      *     }
                      */
                     "application/json": components["schemas"]["ComparisonAnswer"];
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. `malformed-body`: Not UTF-8, not JSON, nested too deep, or not gzip. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unauthorized`: No key, or none that is known. */
+            401: {
+                headers: {
+                    "www-authenticate": components["headers"]["WwwAuthenticate"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-slow`: No byte of it arrived for a while, or it took too long as a whole. */
+            408: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            413: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            415: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-request`: Schema, relations or physics; every error says where and what would be right. `too-much-work`: Refused before starting, with the estimate and the limit. `time-limit-exceeded`: Stopped at the limit of computing time; the same request would end the same. */
+            422: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. `worker-lost`: The worker died or ran out of memory with this request; do not simply retry. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `overloaded`: The queue is full; nothing was begun. Retry after the time that Retry-After says. `draining`: Nothing was begun; another replica, or this one after its restart, will answer. */
+            503: {
+                headers: {
+                    "retry-after": components["headers"]["RetryAfter"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    curve: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "module": {
+                 *         "kind": "datasheet",
+                 *         "cellsInSeries": 60,
+                 *         "shortCircuitCurrent": 9.91,
+                 *         "openCircuitVoltage": 38.9,
+                 *         "maximumPowerCurrent": 9.36,
+                 *         "maximumPowerVoltage": 31.8,
+                 *         "shortCircuitCurrentCoefficient": 0.05,
+                 *         "openCircuitVoltageCoefficient": -0.29
+                 *       },
+                 *       "irradiance": 800,
+                 *       "cellTemperature": 45,
+                 *       "points": 9,
+                 *       "rules": [
+                 *         {
+                 *           "kind": "constant-voltage"
+                 *         },
+                 *         {
+                 *           "kind": "short-current-pulse"
+                 *         }
+                 *       ]
+                 *     }
+                 */
+                "application/json": components["schemas"]["CurveRequest"];
+            };
+        };
+        responses: {
+            /** @description The curve, its peaks, and the place of each rule. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    /**
+                     * @example {
+                     *       "voltage": [
+                     *         0,
+                     *         4.53678,
+                     *         9.07356,
+                     *         13.6103,
+                     *         18.1471,
+                     *         22.6839,
+                     *         27.2207,
+                     *         31.7575,
+                     *         36.2943
+                     *       ],
+                     *       "current": [
+                     *         8.00848,
+                     *         7.99841,
+                     *         7.98833,
+                     *         7.97823,
+                     *         7.96789,
+                     *         7.95288,
+                     *         7.8522,
+                     *         6.53031,
+                     *         0
+                     *       ],
+                     *       "power": [
+                     *         0,
+                     *         36.287,
+                     *         72.4826,
+                     *         108.587,
+                     *         144.594,
+                     *         180.402,
+                     *         213.742,
+                     *         207.386,
+                     *         0
+                     *       ],
+                     *       "peaks": [
+                     *         {
+                     *           "voltage": 29.6039,
+                     *           "current": 7.52236,
+                     *           "power": 222.691
+                     *         }
+                     *       ],
+                     *       "shortCircuitCurrent": 8.00848,
+                     *       "openCircuitVoltage": 36.2943,
+                     *       "places": [
+                     *         {
+                     *           "rule": {
+                     *             "kind": "constant-voltage",
+                     *             "setVoltagePerModule": 31.8,
+                     *             "controlPeriod": 1,
+                     *             "stepFraction": 0
+                     *           },
+                     *           "voltage": 31.8,
+                     *           "current": 6.49926,
+                     *           "power": 206.676,
+                     *           "lost": 16.0146,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 16.0146,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0
+                     *           }
+                     *         },
+                     *         {
+                     *           "rule": {
+                     *             "kind": "short-current-pulse",
+                     *             "fraction": 0.92,
+                     *             "samplePeriod": 16,
+                     *             "sampleDuration": 0.032,
+                     *             "pilotCell": false,
+                     *             "controlPeriod": 1,
+                     *             "stepFraction": 0
+                     *           },
+                     *           "voltage": 30.1295,
+                     *           "current": 7.35307,
+                     *           "power": 221.544,
+                     *           "lost": 1.14681,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.702832,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0.443976
+                     *           }
+                     *         }
+                     *       ],
+                     *       "module": {
+                     *         "fit": "exact",
+                     *         "circuit": {
+                     *           "kind": "single-diode",
+                     *           "cellsInSeries": 60,
+                     *           "photocurrent": 9.91785,
+                     *           "saturationCurrent": 2.22059e-11,
+                     *           "seriesResistance": 0.284981,
+                     *           "shuntResistance": 359.887,
+                     *           "idealityVoltage": 1.45073,
+                     *           "photocurrentCoefficient": 0.0499604,
+                     *           "bandgap": 1.121,
+                     *           "bandgapCoefficient": -0.0002677
+                     *         },
+                     *         "misfits": {
+                     *           "shortCircuitCurrent": 0,
+                     *           "openCircuitVoltage": 0,
+                     *           "maximumPowerCurrent": 0,
+                     *           "maximumPowerSlope": 0,
+                     *           "openCircuitVoltageCoefficient": 0
+                     *         }
+                     *       },
+                     *       "provenance": {
+                     *         "version": "0.1.0",
+                     *         "models": [
+                     *           {
+                     *             "name": "datasheet-fit",
+                     *             "version": "1",
+                     *             "source": "De Soto, Klein & Beckman, Solar Energy 80 (2006) 78-88 (from memory), its five conditions"
+                     *           },
+                     *           {
+                     *             "name": "single-diode",
+                     *             "version": "1",
+                     *             "source": "De Soto, Klein & Beckman, Solar Energy 80 (2006) 78-88 (from memory), its translation to irradiance and temperature"
+                     *           },
+                     *           {
+                     *             "name": "constant-voltage",
+                     *             "version": "1",
+                     *             "source": "Esram & Chapman, IEEE Trans. Energy Convers. 22(2) (2007) 439-449 (from memory)"
+                     *           },
+                     *           {
+                     *             "name": "short-current-pulse",
+                     *             "version": "1",
+                     *             "source": "Noguchi, Togashi & Nakamoto, IEEE Trans. Ind. Electron. 49(1) (2002) 217-223 (fraction .92; from memory); Esram & Chapman, IEEE Trans. Energy Convers. 22(2) (2007) 439-449 (.78 to .92; from memory)"
+                     *           }
+                     *         ],
+                     *         "inputDigest": "1152abdc7dfb915ce71add1873d1287103c080b07c23ba8d48fcf9450f33f0c5"
+                     *       }
+                     *     }
+                     */
+                    "application/json": components["schemas"]["CurveAnswer"];
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. `malformed-body`: Not UTF-8, not JSON, nested too deep, or not gzip. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unauthorized`: No key, or none that is known. */
+            401: {
+                headers: {
+                    "www-authenticate": components["headers"]["WwwAuthenticate"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-slow`: No byte of it arrived for a while, or it took too long as a whole. */
+            408: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            413: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            415: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-request`: Schema, relations or physics; every error says where and what would be right. `too-much-work`: Refused before starting, with the estimate and the limit. `time-limit-exceeded`: Stopped at the limit of computing time; the same request would end the same. */
+            422: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. `worker-lost`: The worker died or ran out of memory with this request; do not simply retry. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `overloaded`: The queue is full; nothing was begun. Retry after the time that Retry-After says. `draining`: Nothing was begun; another replica, or this one after its restart, will answer. */
+            503: {
+                headers: {
+                    "retry-after": components["headers"]["RetryAfter"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    testEfficiency: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "module": {
+                 *         "kind": "test-generator",
+                 *         "technology": "crystalline-silicon",
+                 *         "maximumPower": 1000,
+                 *         "maximumPowerVoltage": 100
+                 *       },
+                 *       "rule": {
+                 *         "kind": "fractional-open-circuit-voltage",
+                 *         "fraction": 0.8
+                 *       },
+                 *       "test": "static"
+                 *     }
+                 */
+                "application/json": components["schemas"]["EfficiencyTestRequest"];
+            };
+        };
+        responses: {
+            /** @description Rows or levels with their efficiencies. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    /**
+                     * @example {
+                     *       "test": "static",
+                     *       "edition": "EN 50530:2010 (sequences from memory)",
+                     *       "resolved": {
+                     *         "rule": {
+                     *           "kind": "fractional-open-circuit-voltage",
+                     *           "fraction": 0.8,
+                     *           "samplePeriod": 16,
+                     *           "sampleDuration": 0.256,
+                     *           "pilotCell": false,
+                     *           "controlPeriod": 1,
+                     *           "stepFraction": 0
+                     *         },
+                     *         "converter": {
+                     *           "trackingMinimumVoltage": 0,
+                     *           "trackingMaximumVoltage": null,
+                     *           "inputVoltageRating": null,
+                     *           "maximumPower": null,
+                     *           "maximumCurrent": null,
+                     *           "wakePower": 0,
+                     *           "rippleAmplitude": 0,
+                     *           "sensorError": {
+                     *             "voltageGain": 0,
+                     *             "voltageOffset": 0,
+                     *             "currentGain": 0,
+                     *             "currentOffset": 0
+                     *           },
+                     *           "resolution": {
+                     *             "voltage": 0,
+                     *             "current": 0
+                     *           }
+                     *         }
+                     *       },
+                     *       "rows": null,
+                     *       "levels": [
+                     *         {
+                     *           "level": 0.05,
+                     *           "irradiance": 58.2701,
+                     *           "efficiency": 0.983976,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.000023966,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0.0159996
+                     *           }
+                     *         },
+                     *         {
+                     *           "level": 0.1,
+                     *           "irradiance": 110.225,
+                     *           "efficiency": 0.983976,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.000023966,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0.0159996
+                     *           }
+                     *         },
+                     *         {
+                     *           "level": 0.2,
+                     *           "irradiance": 210.119,
+                     *           "efficiency": 0.983976,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.000023966,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0.0159996
+                     *           }
+                     *         },
+                     *         {
+                     *           "level": 0.25,
+                     *           "irradiance": 259.189,
+                     *           "efficiency": 0.983976,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.000023966,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0.0159996
+                     *           }
+                     *         },
+                     *         {
+                     *           "level": 0.3,
+                     *           "irradiance": 307.986,
+                     *           "efficiency": 0.983976,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.000023966,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0.0159996
+                     *           }
+                     *         },
+                     *         {
+                     *           "level": 0.5,
+                     *           "irradiance": 502.517,
+                     *           "efficiency": 0.983976,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.000023966,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0.0159996
+                     *           }
+                     *         },
+                     *         {
+                     *           "level": 0.75,
+                     *           "irradiance": 748.152,
+                     *           "efficiency": 0.983976,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.000023966,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0.0159996
+                     *           }
+                     *         },
+                     *         {
+                     *           "level": 1,
+                     *           "irradiance": 1000,
+                     *           "efficiency": 0.983976,
+                     *           "lostByCause": {
+                     *             "voltageWindow": 0,
+                     *             "wrongPeak": 0,
+                     *             "setPoint": 0.000023966,
+                     *             "heldSample": 0,
+                     *             "regulation": 0,
+                     *             "interruption": 0.0159996
+                     *           }
+                     *         }
+                     *       ],
+                     *       "efficiency": null,
+                     *       "duration": null,
+                     *       "europeanWeighted": 0.983976,
+                     *       "cecWeighted": 0.983976,
+                     *       "trace": null,
+                     *       "module": {
+                     *         "fit": "given",
+                     *         "circuit": null,
+                     *         "misfits": null
+                     *       },
+                     *       "provenance": {
+                     *         "version": "0.1.0",
+                     *         "models": [
+                     *           {
+                     *             "name": "test-generator",
+                     *             "version": "1",
+                     *             "source": "EN 50530:2010 Annex C; IEC 62891:2020 Annex A"
+                     *           },
+                     *           {
+                     *             "name": "fractional-open-circuit-voltage",
+                     *             "version": "1",
+                     *             "source": "Enslin, Wolf, Snyman & Swiegers, IEEE Trans. Ind. Electron. 44(6) (1997) 769-773 (fraction .76; from memory); Esram & Chapman, IEEE Trans. Energy Convers. 22(2) (2007) 439-449 (.71 to .78; from memory)"
+                     *           },
+                     *           {
+                     *             "name": "efficiency-test",
+                     *             "version": "1",
+                     *             "source": "EN 50530:2010 (sequences from memory)"
+                     *           }
+                     *         ],
+                     *         "inputDigest": "f05868b56eb401ef73b2d569b23f4dc766822fa6163e0dc043f860bcd8a786d9"
+                     *       }
+                     *     }
+                     */
+                    "application/json": components["schemas"]["EfficiencyTestAnswer"];
                 };
             };
             /** @description `malformed-request`: The HTTP parser could not read the request. `malformed-body`: Not UTF-8, not JSON, nested too deep, or not gzip. */
@@ -2373,11 +3491,11 @@ export interface operations {
                      *           "bandgapCoefficient": -0.0002677
                      *         },
                      *         "misfits": {
-                     *           "shortCircuitCurrent": 2.22045e-16,
+                     *           "shortCircuitCurrent": 0,
                      *           "openCircuitVoltage": 0,
-                     *           "maximumPowerCurrent": -2.22045e-16,
-                     *           "maximumPowerSlope": -7.59127e-16,
-                     *           "openCircuitVoltageCoefficient": -3.10862e-15
+                     *           "maximumPowerCurrent": 0,
+                     *           "maximumPowerSlope": 0,
+                     *           "openCircuitVoltageCoefficient": 0
                      *         }
                      *       },
                      *       "cautions": [
@@ -2411,11 +3529,11 @@ export interface operations {
                      *         },
                      *         {
                      *           "code": "wind-assumed",
+                     *           "severity": "info",
                      *           "detail": "No wind speed was given: 1 m/s was taken throughout for the cell temperature.",
                      *           "values": {
                      *             "windSpeed": 1
-                     *           },
-                     *           "severity": "info"
+                     *           }
                      *         },
                      *         {
                      *           "code": "planning-estimate",
@@ -2453,11 +3571,211 @@ export interface operations {
                      *             "source": "own derivation: each sample at rest, the causes telescoping from available to delivered power"
                      *           }
                      *         ],
-                     *         "inputDigest": "28b5e924d4daa1c9da005eb24664bb5fd4515e6bd161d077e91e85e167476bf7"
+                     *         "inputDigest": "e6411bbec2f4de551265fc7f69490fbc8865d5d372750b92236f25ffd3607d54"
                      *       }
                      *     }
                      */
                     "application/json": components["schemas"]["EstimateAnswer"];
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. `malformed-body`: Not UTF-8, not JSON, nested too deep, or not gzip. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unauthorized`: No key, or none that is known. */
+            401: {
+                headers: {
+                    "www-authenticate": components["headers"]["WwwAuthenticate"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-slow`: No byte of it arrived for a while, or it took too long as a whole. */
+            408: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            413: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            415: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-request`: Schema, relations or physics; every error says where and what would be right. `too-much-work`: Refused before starting, with the estimate and the limit. `time-limit-exceeded`: Stopped at the limit of computing time; the same request would end the same. */
+            422: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. `worker-lost`: The worker died or ran out of memory with this request; do not simply retry. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `overloaded`: The queue is full; nothing was begun. Retry after the time that Retry-After says. `draining`: Nothing was begun; another replica, or this one after its restart, will answer. */
+            503: {
+                headers: {
+                    "retry-after": components["headers"]["RetryAfter"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    fitModule: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "module": {
+                 *         "kind": "datasheet",
+                 *         "cellsInSeries": 60,
+                 *         "shortCircuitCurrent": 9.91,
+                 *         "openCircuitVoltage": 38.9,
+                 *         "maximumPowerCurrent": 9.36,
+                 *         "maximumPowerVoltage": 31.8,
+                 *         "shortCircuitCurrentCoefficient": 0.05,
+                 *         "openCircuitVoltageCoefficient": -0.29
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["ModuleFitRequest"];
+            };
+        };
+        responses: {
+            /** @description The circuit and its misfits. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    /**
+                     * @example {
+                     *       "fit": "exact",
+                     *       "circuit": {
+                     *         "kind": "single-diode",
+                     *         "cellsInSeries": 60,
+                     *         "photocurrent": 9.91785,
+                     *         "saturationCurrent": 2.22059e-11,
+                     *         "seriesResistance": 0.284981,
+                     *         "shuntResistance": 359.887,
+                     *         "idealityVoltage": 1.45073,
+                     *         "photocurrentCoefficient": 0.0499604,
+                     *         "bandgap": 1.121,
+                     *         "bandgapCoefficient": -0.0002677
+                     *       },
+                     *       "misfits": {
+                     *         "shortCircuitCurrent": 0,
+                     *         "openCircuitVoltage": 0,
+                     *         "maximumPowerCurrent": 0,
+                     *         "maximumPowerSlope": 0,
+                     *         "openCircuitVoltageCoefficient": 0
+                     *       },
+                     *       "measured": null,
+                     *       "rootMeanSquareError": null,
+                     *       "standard": {
+                     *         "maximumPowerVoltage": 31.8,
+                     *         "maximumPowerCurrent": 9.36,
+                     *         "maximumPower": 297.648,
+                     *         "openCircuitVoltage": 38.9,
+                     *         "shortCircuitCurrent": 9.91,
+                     *         "openCircuitVoltageCoefficient": -0.29
+                     *       },
+                     *       "provenance": {
+                     *         "version": "0.1.0",
+                     *         "models": [
+                     *           {
+                     *             "name": "datasheet-fit",
+                     *             "version": "1",
+                     *             "source": "De Soto, Klein & Beckman, Solar Energy 80 (2006) 78-88 (from memory), its five conditions"
+                     *           }
+                     *         ],
+                     *         "inputDigest": "9f64a03d8d5e8a3dba80e0004bb6ce92c0275b210ed61d4f6185f81158d364c9"
+                     *       }
+                     *     }
+                     */
+                    "application/json": components["schemas"]["ModuleFitAnswer"];
                 };
             };
             /** @description `malformed-request`: The HTTP parser could not read the request. `malformed-body`: Not UTF-8, not JSON, nested too deep, or not gzip. */
@@ -2652,6 +3970,475 @@ export interface operations {
             /** @description `internal`: A defect of the service; the request id finds it in the log. */
             500: {
                 headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    tune: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "module": {
+                 *         "kind": "datasheet",
+                 *         "cellsInSeries": 60,
+                 *         "shortCircuitCurrent": 9.91,
+                 *         "openCircuitVoltage": 38.9,
+                 *         "maximumPowerCurrent": 9.36,
+                 *         "maximumPowerVoltage": 31.8,
+                 *         "shortCircuitCurrentCoefficient": 0.05,
+                 *         "openCircuitVoltageCoefficient": -0.29
+                 *       },
+                 *       "climate": {
+                 *         "start": "2025-04-12T00:00:00+02:00",
+                 *         "step": 10800,
+                 *         "irradiance": {
+                 *           "kind": "plane-of-array",
+                 *           "values": [
+                 *             0,
+                 *             0,
+                 *             120,
+                 *             560,
+                 *             810,
+                 *             470,
+                 *             60,
+                 *             0
+                 *           ]
+                 *         },
+                 *         "temperature": {
+                 *           "kind": "ambient",
+                 *           "values": [
+                 *             4.1,
+                 *             3.6,
+                 *             7.2,
+                 *             11.8,
+                 *             14.9,
+                 *             14.1,
+                 *             9.3,
+                 *             6
+                 *           ]
+                 *         }
+                 *       },
+                 *       "rule": {
+                 *         "kind": "fractional-open-circuit-voltage"
+                 *       },
+                 *       "parameter": "fraction",
+                 *       "range": {
+                 *         "from": 0.7,
+                 *         "to": 0.9
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["TuningRequest"];
+            };
+        };
+        responses: {
+            /** @description The optimum and the loss curve. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    /**
+                     * @example {
+                     *       "parameter": "fraction",
+                     *       "unit": "1, of the sampled open-circuit voltage",
+                     *       "today": {
+                     *         "value": 0.76,
+                     *         "lost": 0.119098,
+                     *         "lostFraction": 0.0673451
+                     *       },
+                     *       "optimum": {
+                     *         "value": 0.833599,
+                     *         "lost": 0.0348768,
+                     *         "lostFraction": 0.0197214
+                     *       },
+                     *       "flatRange": {
+                     *         "from": 0.824907,
+                     *         "to": 0.84148
+                     *       },
+                     *       "curve": [
+                     *         {
+                     *           "value": 0.7,
+                     *           "lost": 0.238309,
+                     *           "lostFraction": 0.134754
+                     *         },
+                     *         {
+                     *           "value": 0.705,
+                     *           "lost": 0.227855,
+                     *           "lostFraction": 0.128843
+                     *         },
+                     *         {
+                     *           "value": 0.71,
+                     *           "lost": 0.21746,
+                     *           "lostFraction": 0.122965
+                     *         },
+                     *         {
+                     *           "value": 0.715,
+                     *           "lost": 0.207132,
+                     *           "lostFraction": 0.117125
+                     *         },
+                     *         {
+                     *           "value": 0.72,
+                     *           "lost": 0.196878,
+                     *           "lostFraction": 0.111327
+                     *         },
+                     *         {
+                     *           "value": 0.725,
+                     *           "lost": 0.18671,
+                     *           "lostFraction": 0.105577
+                     *         },
+                     *         {
+                     *           "value": 0.73,
+                     *           "lost": 0.176639,
+                     *           "lostFraction": 0.0998824
+                     *         },
+                     *         {
+                     *           "value": 0.735,
+                     *           "lost": 0.166678,
+                     *           "lostFraction": 0.0942495
+                     *         },
+                     *         {
+                     *           "value": 0.74,
+                     *           "lost": 0.15684,
+                     *           "lostFraction": 0.088687
+                     *         },
+                     *         {
+                     *           "value": 0.745,
+                     *           "lost": 0.147144,
+                     *           "lostFraction": 0.083204
+                     *         },
+                     *         {
+                     *           "value": 0.75,
+                     *           "lost": 0.137607,
+                     *           "lostFraction": 0.0778112
+                     *         },
+                     *         {
+                     *           "value": 0.755,
+                     *           "lost": 0.12825,
+                     *           "lostFraction": 0.0725204
+                     *         },
+                     *         {
+                     *           "value": 0.76,
+                     *           "lost": 0.119098,
+                     *           "lostFraction": 0.0673451
+                     *         },
+                     *         {
+                     *           "value": 0.765,
+                     *           "lost": 0.110176,
+                     *           "lostFraction": 0.0623003
+                     *         },
+                     *         {
+                     *           "value": 0.77,
+                     *           "lost": 0.101516,
+                     *           "lostFraction": 0.0574031
+                     *         },
+                     *         {
+                     *           "value": 0.775,
+                     *           "lost": 0.0931497,
+                     *           "lostFraction": 0.0526725
+                     *         },
+                     *         {
+                     *           "value": 0.78,
+                     *           "lost": 0.0851162,
+                     *           "lostFraction": 0.0481298
+                     *         },
+                     *         {
+                     *           "value": 0.785,
+                     *           "lost": 0.0774573,
+                     *           "lostFraction": 0.043799
+                     *         },
+                     *         {
+                     *           "value": 0.79,
+                     *           "lost": 0.0702203,
+                     *           "lostFraction": 0.0397068
+                     *         },
+                     *         {
+                     *           "value": 0.795,
+                     *           "lost": 0.0634578,
+                     *           "lostFraction": 0.0358829
+                     *         },
+                     *         {
+                     *           "value": 0.8,
+                     *           "lost": 0.0572285,
+                     *           "lostFraction": 0.0323604
+                     *         },
+                     *         {
+                     *           "value": 0.805,
+                     *           "lost": 0.0515971,
+                     *           "lostFraction": 0.0291761
+                     *         },
+                     *         {
+                     *           "value": 0.81,
+                     *           "lost": 0.0466354,
+                     *           "lostFraction": 0.0263705
+                     *         },
+                     *         {
+                     *           "value": 0.815,
+                     *           "lost": 0.0424227,
+                     *           "lostFraction": 0.0239883
+                     *         },
+                     *         {
+                     *           "value": 0.82,
+                     *           "lost": 0.0390457,
+                     *           "lostFraction": 0.0220788
+                     *         },
+                     *         {
+                     *           "value": 0.825,
+                     *           "lost": 0.0365998,
+                     *           "lostFraction": 0.0206957
+                     *         },
+                     *         {
+                     *           "value": 0.83,
+                     *           "lost": 0.0351889,
+                     *           "lostFraction": 0.0198979
+                     *         },
+                     *         {
+                     *           "value": 0.835,
+                     *           "lost": 0.0349257,
+                     *           "lostFraction": 0.0197491
+                     *         },
+                     *         {
+                     *           "value": 0.84,
+                     *           "lost": 0.0359324,
+                     *           "lostFraction": 0.0203183
+                     *         },
+                     *         {
+                     *           "value": 0.845,
+                     *           "lost": 0.0383404,
+                     *           "lostFraction": 0.0216799
+                     *         },
+                     *         {
+                     *           "value": 0.85,
+                     *           "lost": 0.0422904,
+                     *           "lostFraction": 0.0239136
+                     *         },
+                     *         {
+                     *           "value": 0.855,
+                     *           "lost": 0.0479327,
+                     *           "lostFraction": 0.027104
+                     *         },
+                     *         {
+                     *           "value": 0.86,
+                     *           "lost": 0.0554263,
+                     *           "lostFraction": 0.0313414
+                     *         },
+                     *         {
+                     *           "value": 0.865,
+                     *           "lost": 0.064939,
+                     *           "lostFraction": 0.0367204
+                     *         },
+                     *         {
+                     *           "value": 0.87,
+                     *           "lost": 0.0766466,
+                     *           "lostFraction": 0.0433406
+                     *         },
+                     *         {
+                     *           "value": 0.875,
+                     *           "lost": 0.0907323,
+                     *           "lostFraction": 0.0513055
+                     *         },
+                     *         {
+                     *           "value": 0.88,
+                     *           "lost": 0.107385,
+                     *           "lostFraction": 0.0607222
+                     *         },
+                     *         {
+                     *           "value": 0.885,
+                     *           "lost": 0.126801,
+                     *           "lostFraction": 0.071701
+                     *         },
+                     *         {
+                     *           "value": 0.89,
+                     *           "lost": 0.149178,
+                     *           "lostFraction": 0.0843544
+                     *         },
+                     *         {
+                     *           "value": 0.895,
+                     *           "lost": 0.174719,
+                     *           "lostFraction": 0.0987967
+                     *         },
+                     *         {
+                     *           "value": 0.9,
+                     *           "lost": 0.203627,
+                     *           "lostFraction": 0.115143
+                     *         }
+                     *       ],
+                     *       "sites": [
+                     *         {
+                     *           "id": "site",
+                     *           "available": 1.76847,
+                     *           "optimum": {
+                     *             "value": 0.833599,
+                     *             "lost": 0.0348768,
+                     *             "lostFraction": 0.0197214
+                     *           },
+                     *           "atCommon": {
+                     *             "value": 0.833599,
+                     *             "lost": 0.0348768,
+                     *             "lostFraction": 0.0197214
+                     *           },
+                     *           "regret": 0
+                     *         }
+                     *       ],
+                     *       "mode": "steady",
+                     *       "provenance": {
+                     *         "version": "0.1.0",
+                     *         "models": [
+                     *           {
+                     *             "name": "datasheet-fit",
+                     *             "version": "1",
+                     *             "source": "De Soto, Klein & Beckman, Solar Energy 80 (2006) 78-88 (from memory), its five conditions"
+                     *           },
+                     *           {
+                     *             "name": "single-diode",
+                     *             "version": "1",
+                     *             "source": "De Soto, Klein & Beckman, Solar Energy 80 (2006) 78-88 (from memory), its translation to irradiance and temperature"
+                     *           },
+                     *           {
+                     *             "name": "cell-temperature-faiman",
+                     *             "version": "1",
+                     *             "source": "Faiman, Prog. Photovolt. 16 (2008) 307-315"
+                     *           },
+                     *           {
+                     *             "name": "fractional-open-circuit-voltage",
+                     *             "version": "1",
+                     *             "source": "Enslin, Wolf, Snyman & Swiegers, IEEE Trans. Ind. Electron. 44(6) (1997) 769-773 (fraction .76; from memory); Esram & Chapman, IEEE Trans. Energy Convers. 22(2) (2007) 439-449 (.71 to .78; from memory)"
+                     *           },
+                     *           {
+                     *             "name": "tuning",
+                     *             "version": "1",
+                     *             "source": "own derivation: the loss curve sampled, its lowest bracket closed in"
+                     *           }
+                     *         ],
+                     *         "inputDigest": "fe7acaf8100c309d8184bc21f3f66fa7a292d85b9b77ec90c023ea1b75a6bde9"
+                     *       }
+                     *     }
+                     */
+                    "application/json": components["schemas"]["TuningAnswer"];
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. `malformed-body`: Not UTF-8, not JSON, nested too deep, or not gzip. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unauthorized`: No key, or none that is known. */
+            401: {
+                headers: {
+                    "www-authenticate": components["headers"]["WwwAuthenticate"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-slow`: No byte of it arrived for a while, or it took too long as a whole. */
+            408: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            413: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            415: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-request`: Schema, relations or physics; every error says where and what would be right. `too-much-work`: Refused before starting, with the estimate and the limit. `time-limit-exceeded`: Stopped at the limit of computing time; the same request would end the same. */
+            422: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. `worker-lost`: The worker died or ran out of memory with this request; do not simply retry. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `overloaded`: The queue is full; nothing was begun. Retry after the time that Retry-After says. `draining`: Nothing was begun; another replica, or this one after its restart, will answer. */
+            503: {
+                headers: {
+                    "retry-after": components["headers"]["RetryAfter"];
                     "x-request-id": components["headers"]["RequestId"];
                     [name: string]: unknown;
                 };

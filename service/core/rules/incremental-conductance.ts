@@ -36,7 +36,7 @@ export const incrementalConductance = defineRule({
     currentTolerance: {
       type: "number",
       unit: "1, of the current",
-      description: "Relative change of the current that wakes a resting rule.",
+      description: "Relative change of the current, since it came to rest, that wakes a resting rule.",
       default: 1e-3,
       minimum: 0,
       maximum: 1,

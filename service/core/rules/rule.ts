@@ -100,7 +100,10 @@ export interface TargetRule {
 /** A direction of the terminal voltage: down, stay, up. */
 export type Direction = -1 | 0 | 1;
 
-/** What a climbing rule reads of the last two control periods: V, A, W. NaN before there is anything to see. */
+/**
+ * What a climbing rule reads of the last two control periods: V, A, W; while it rests, of the first period of the rest
+ * and the last. NaN before there is anything to see.
+ */
 export interface Seen {
   earlierVoltage: number;
   earlierCurrent: number;

@@ -39,9 +39,13 @@ export function climbOn(
   point: OperatingPoint,
 ): number {
   const { voltageSensor, currentSensor } = terminals.converter;
-  seen.earlierVoltage = seen.voltage;
-  seen.earlierCurrent = seen.current;
-  seen.earlierPower = seen.power;
+  // A rule at rest measures change from where it came to rest, not from period to period: a slow drift adds up.
+  const rests = seen.direction === 0 && seen.voltage === seen.earlierVoltage;
+  if (!rests) {
+    seen.earlierVoltage = seen.voltage;
+    seen.earlierCurrent = seen.current;
+    seen.earlierPower = seen.power;
+  }
   seen.voltage = readingOf(voltageSensor, point.voltage);
   seen.current = readingOf(currentSensor, point.current);
   seen.power = readPower(terminals, point);

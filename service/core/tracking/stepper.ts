@@ -98,6 +98,7 @@ export class Stepper {
     }
     if (rule.behaviour === "perfect") {
       terminals.operateWithoutRipple(terminals.bestVoltage, point);
+      point.power = terminals.best;
     } else {
       const reading = rule.sampling === null ? 0 : readSample(rule.sampling, terminals);
       const fresh = targetVoltage(rule, terminals, reading, this.outsideAt(time, run));
@@ -165,12 +166,12 @@ export class Stepper {
     const best = sum(FOLLOWED.best);
     tally.best += best;
     const { rule } = this.contender;
-    const fresh = rule.behaviour === "climb" ? best : sum(FOLLOWED.fresh);
+    const fresh = rule.behaviour === "target" ? sum(FOLLOWED.fresh) : best;
     tally.fresh += fresh;
     if (rule.behaviour === "climb") tally.held += best;
     if (!this.smooth) return;
     tally.held += fresh;
-    tally.operating += sum(FOLLOWED.power);
+    tally.operating += rule.behaviour === "perfect" ? best : sum(FOLLOWED.power);
     tally.voltage += sum(FOLLOWED.voltage);
     tally.current += sum(FOLLOWED.current);
     tally.lit += count - cut;

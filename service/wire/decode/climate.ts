@@ -15,6 +15,7 @@ type RawClimate = z.output<typeof ClimateSchema>;
 export function checkClimate(climate: RawClimate, limits: Limits): Flaw[] {
   return [
     ...checkStart(climate),
+    ...checkComponents(climate),
     ...checkLengths(climate, limits),
     ...checkPresence(climate),
     ...checkMount(climate),
@@ -36,18 +37,46 @@ function checkStart({ start }: RawClimate): Flaw[] {
   ];
 }
 
+/** The columns of the light that were given, by where they stand. */
+function lightColumns({ irradiance }: RawClimate): [string, RawColumn][] {
+  if (irradiance.kind === "plane-of-array") return [["/climate/irradiance/values", irradiance.values]];
+  return (["global", "directNormal", "diffuse"] as const).flatMap((name): [string, RawColumn][] => {
+    const values = irradiance[name];
+    return values === undefined ? [] : [[`/climate/irradiance/${name}`, values]];
+  });
+}
+
+/** All columns that were given; the first is the light's that the others are measured by. */
+function columnsOf(climate: RawClimate): [string, RawColumn][] {
+  const { temperature } = climate;
+  const columns = lightColumns(climate);
+  columns.push(["/climate/temperature/values", temperature.values]);
+  if (temperature.kind === "ambient" && temperature.windSpeed !== undefined) {
+    columns.push(["/climate/temperature/windSpeed", temperature.windSpeed]);
+  }
+  return columns;
+}
+
+/** Global alone or two of the three components: direct or diffuse alone say too little. */
+function checkComponents({ irradiance }: RawClimate): Flaw[] {
+  if (irradiance.kind !== "horizontal" || irradiance.global !== undefined) return [];
+  if (irradiance.directNormal !== undefined && irradiance.diffuse !== undefined) return [];
+  return [
+    {
+      pointer: "/climate/irradiance",
+      code: "components-missing",
+      detail: "Direct or diffuse irradiance alone does not say how much light there is: give global, or both of them.",
+      expected: "global, or directNormal and diffuse",
+    },
+  ];
+}
+
 function checkLengths(climate: RawClimate, limits: Limits): Flaw[] {
-  const { irradiance, temperature, step } = climate;
-  const samples = irradiance.values.length;
+  const { step } = climate;
+  const [[first, { length: samples }], ...others] = columnsOf(climate);
   if (samples > limits.samples) {
-    return [
-      {
-        pointer: "/climate/irradiance/values",
-        code: "too-many",
-        detail: `The climate has ${samples} samples.`,
-        expected: `at most ${limits.samples} samples`,
-      },
-    ];
+    const detail = `The climate has ${samples} samples.`;
+    return [{ pointer: first, code: "too-many", detail, expected: `at most ${limits.samples} samples` }];
   }
   if (samples * step > CLIMATE_YEARS * 365.25 * 86_400) {
     return [
@@ -59,41 +88,26 @@ function checkLengths(climate: RawClimate, limits: Limits): Flaw[] {
       },
     ];
   }
-  const columns: [string, RawColumn | undefined][] = [
-    ["/climate/temperature/values", temperature.values],
-    ["/climate/temperature/windSpeed", temperature.kind === "ambient" ? temperature.windSpeed : undefined],
-  ];
-  return columns.flatMap(([pointer, values]) =>
-    values === undefined || values.length === samples
-      ? []
-      : [
-          {
-            pointer,
-            code: "unequal-columns",
-            detail: `This column has ${values.length} values, irradiance has ${samples}; give every column one value a sample.`,
-            expected: `${samples} values`,
-          },
-        ],
-  );
+  const name = first.split("/").at(-1) === "values" ? "irradiance" : first.split("/").at(-1);
+  return others
+    .filter(([, values]) => values.length !== samples)
+    .map(([pointer, values]) => ({
+      pointer,
+      code: "unequal-columns",
+      detail: `This column has ${values.length} values, ${name} has ${samples}; give every column one value a sample.`,
+      expected: `${samples} values`,
+    }));
 }
 
-function checkPresence({ irradiance, temperature }: RawClimate): Flaw[] {
-  const columns: [string, RawColumn][] = [
-    ["/climate/irradiance/values", irradiance.values],
-    ["/climate/temperature/values", temperature.values],
-  ];
-  return columns.flatMap(([pointer, values]) =>
-    values.some((value) => value !== null)
-      ? []
-      : [
-          {
-            pointer,
-            code: "all-missing",
-            detail: "Every sample of this column is missing.",
-            expected: "at least one number",
-          },
-        ],
-  );
+function checkPresence(climate: RawClimate): Flaw[] {
+  return columnsOf(climate)
+    .filter(([, values]) => values.every((value) => value === null))
+    .map(([pointer]) => ({
+      pointer,
+      code: "all-missing",
+      detail: "Every sample of this column is missing.",
+      expected: "at least one number",
+    }));
 }
 
 const MOUNTS = [
@@ -120,16 +134,19 @@ function checkMount({ temperature }: RawClimate): Flaw[] {
 }
 
 /** A week of light that never passes 2 W/m2 is a series in kW/m2 (or kWh/m2 an hour), not a dim one. */
-function checkKilowatts({ irradiance, step }: RawClimate): Flaw[] {
-  const { values } = irradiance;
-  if (values.length * step < 7 * 86_400) return [];
-  const highest = values.reduce<number>((most, value) => (value !== null && value > most ? value : most), 0);
+function checkKilowatts(climate: RawClimate): Flaw[] {
+  const { step } = climate;
+  const columns = lightColumns(climate);
+  const { length } = columns[0]?.[1] ?? [];
+  if (length * step < 7 * 86_400) return [];
+  let highest = 0;
+  for (const [, values] of columns) for (const value of values) if (value !== null && value > highest) highest = value;
   if (!(highest > 0.2 && highest <= 2)) return [];
   return [
     {
-      pointer: "/climate/irradiance/values",
+      pointer: columns[0][0],
       code: "unit-mistaken",
-      detail: `The strongest light of ${Math.round((values.length * step) / 86_400)} days is ${highest} W/m2: it looks like kW/m2, or kWh/m2 an hour. Multiply by 1000.`,
+      detail: `The strongest light of ${Math.round((length * step) / 86_400)} days is ${highest} W/m2: it looks like kW/m2, or kWh/m2 an hour. Multiply by 1000.`,
       expected: "W/m2",
     },
   ];
@@ -151,8 +168,21 @@ export function decodeClimate(climate: RawClimate): ClimateSeries {
     step,
     timing,
     gaps,
-    irradiance: { kind: climate.irradiance.kind, values: toColumn(climate.irradiance.values) },
+    irradiance: decodeIrradiance(climate.irradiance),
     temperature: decodeTemperature(climate.temperature),
+  };
+}
+
+function decodeIrradiance(irradiance: RawClimate["irradiance"]): ClimateSeries["irradiance"] {
+  if (irradiance.kind === "plane-of-array") return { kind: "plane-of-array", values: toColumn(irradiance.values) };
+  const given = (values: RawColumn | undefined) => (values === undefined ? undefined : toColumn(values));
+  return {
+    kind: "horizontal",
+    global: given(irradiance.global),
+    directNormal: given(irradiance.directNormal),
+    diffuse: given(irradiance.diffuse),
+    site: irradiance.site,
+    skyModel: irradiance.skyModel,
   };
 }
 
@@ -160,6 +190,7 @@ function decodeTemperature(temperature: RawClimate["temperature"]): ClimateSerie
   const values = toColumn(temperature.values);
   if (temperature.kind === "cell") return { kind: "cell", values };
   const windSpeed = temperature.windSpeed === undefined ? null : toColumn(temperature.windSpeed);
+  const { thermalLag } = temperature;
   const model = temperature.model ?? CellTemperatureModelSchema.parse({ kind: "faiman" });
-  return { kind: "ambient", values, windSpeed, model: model as CellTemperatureModel };
+  return { kind: "ambient", values, windSpeed, model: model as CellTemperatureModel, thermalLag };
 }

@@ -37,12 +37,19 @@ function explainOne(issue: Issue, refusal: Refusal): Flaw[] {
     case "invalid_value":
       return [notOneOf(pointer, value, issue.values.map(String))];
     case "invalid_union":
-      return [notOneOf(`${pointer}`, value, kindsOf(schemaAt(refusal.schema, path.slice(0, -1), refusal.root)))];
+      if (issue.errors.length > 0) return explainUnion(issue.errors, path, refusal);
+      return [notOneOf(pointer, value, kindsOf(schemaAt(refusal.schema, path.slice(0, -1), refusal.root)))];
     case "invalid_format":
       return [wrongFormat(pointer, path, String(value))];
     default:
       return [{ pointer, code: "invalid", detail: issue.message }];
   }
+}
+
+/** A number or a column: an array is told what is wrong with it as a column, anything else as a number. */
+function explainUnion(errors: readonly (readonly Issue[])[], path: Path, refusal: Refusal): Flaw[] {
+  const issues = Array.isArray(valueAt(refusal.root, path)) ? errors[1] : errors[0];
+  return issues.flatMap((issue) => explainOne({ ...issue, path: [...path, ...issue.path] } as Issue, refusal));
 }
 
 /** A value as one would quote it, shortened. */

@@ -38,7 +38,10 @@ function passScalar(text: string, index: number): number | JsonFault {
   if (/^[-+]?(nan|inf)/i.test(found)) {
     return { index, reason: "NaN and Infinity are not JSON; write null for a missing sample" };
   }
-  if (index >= text.length) return { index, reason: "the text ends too early; was it cut off?" };
+  if (/^[-+.\w]*$/.test(text.slice(index, index + 32))) {
+    const cut = index + 32 > text.length;
+    if (cut) return { index, reason: "the text ends too early; was it cut off?" };
+  }
   if (found.startsWith("'")) return { index, reason: "strings stand in double quotes" };
   if (found.startsWith("/")) return { index, reason: "JSON has no comments" };
   if (/^[\]}]/.test(found)) return { index, reason: "a value is missing here; is there a comma too many?" };

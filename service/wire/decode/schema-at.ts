@@ -24,7 +24,8 @@ function bare(schema: z.ZodType): z.ZodType {
   while (at instanceof z.ZodOptional || at instanceof z.ZodNullable || at instanceof z.ZodDefault) {
     at = at.unwrap() as z.ZodType;
   }
-  return at;
+  // A number or a column: what is asked of it here is asked of the number.
+  return at instanceof z.ZodUnion && !(at instanceof z.ZodDiscriminatedUnion) ? (at.options[0] as z.ZodType) : at;
 }
 
 /** The kinds a discriminated union knows; none for any other schema. */

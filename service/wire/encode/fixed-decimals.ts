@@ -13,25 +13,47 @@ export function rounded(value: number, decimals: number): number {
   return Math.round(value * scale) / scale;
 }
 
-/** Writes a number below 2^31 without sign in decimal digits, `digits` of them, from `at` on. */
-function writeDigits(out: Uint8Array, at: number, number: number, digits: number): number {
-  let rest = number | 0;
-  for (let place = at + digits - 1; place >= at; place--) {
-    const tenth = (rest / 10) | 0;
-    out[place] = ZERO + rest - tenth * 10;
-    rest = tenth;
-  }
-  return at + digits;
+/** The three digits of each number below 1000, and how many of them are left without the zeros at their end. */
+const DIGITS = new Uint8Array(3000);
+const KEPT = new Uint8Array(1000);
+for (let group = 0; group < 1000; group++) {
+  const text = String(group).padStart(3, "0");
+  for (let k = 0; k < 3; k++) DIGITS[3 * group + k] = text.charCodeAt(k);
+  KEPT[group] = text.replace(/0+$/, "").length;
 }
 
-function digitsOf(number: number): number {
-  if (number < 10) return 1;
-  if (number < 100) return 2;
-  if (number < 1000) return 3;
-  if (number < 10_000) return 4;
-  let digits = 5;
-  for (let limit = 100_000; number >= limit; limit *= 10) digits++;
-  return digits;
+function writeGroup(out: Uint8Array, at: number, group: number): void {
+  const from = 3 * group;
+  out[at] = DIGITS[from];
+  out[at + 1] = DIGITS[from + 1];
+  out[at + 2] = DIGITS[from + 2];
+}
+
+/** Writes a whole number below 2^31, no zeros before it. */
+function writeWhole(out: Uint8Array, at: number, whole: number): number {
+  if (whole >= 1000) {
+    const thousands = (whole / 1000) | 0;
+    const end = writeWhole(out, at, thousands);
+    writeGroup(out, end, whole - thousands * 1000);
+    return end + 3;
+  }
+  const skipped = whole < 10 ? 2 : whole < 100 ? 1 : 0;
+  for (let k = skipped; k < 3; k++) out[at + k - skipped] = DIGITS[3 * whole + k];
+  return at + 3 - skipped;
+}
+
+/** Writes the decimals of a fraction in billionths, 1 ... 999999999, no zeros after them. */
+function writeFraction(out: Uint8Array, at: number, billionths: number): number {
+  const thousandths = (billionths / 1e6) | 0;
+  writeGroup(out, at, thousandths);
+  let rest = billionths - thousandths * 1e6;
+  if (rest === 0) return at + KEPT[thousandths];
+  const millionths = (rest / 1000) | 0;
+  writeGroup(out, at + 3, millionths);
+  rest -= millionths * 1000;
+  if (rest === 0) return at + 3 + KEPT[millionths];
+  writeGroup(out, at + 6, rest);
+  return at + 6 + KEPT[rest];
 }
 
 function writeText(out: Uint8Array, at: number, text: string): number {
@@ -40,24 +62,20 @@ function writeText(out: Uint8Array, at: number, text: string): number {
 }
 
 /** Writes `magnitude` / `scale` from `at` on, both whole, `magnitude` in 1 ... 1e15; what JSON.stringify writes. */
-function writeRatio(out: Uint8Array, at: number, magnitude: number, scale: number, decimals: number): number {
+function writeRatio(out: Uint8Array, at: number, magnitude: number, scale: number): number {
   // Exact: below 1e15 the quotient is never rounded up to the next whole number.
   const whole = Math.floor(magnitude / scale);
-  if (whole > 0x7fffffff || (whole === 0 && magnitude * 1e6 < scale))
+  if (whole > 0x7fffffff || (whole === 0 && magnitude * 1e6 < scale)) {
     return writeText(out, at, String(magnitude / scale));
-  let end = writeDigits(out, at, whole, digitsOf(whole));
-  let fraction = magnitude - whole * scale;
-  if (fraction === 0) return end;
-  let digits = decimals;
-  while (fraction % 10 === 0) {
-    fraction /= 10;
-    digits--;
   }
-  out[end++] = POINT;
-  return writeDigits(out, end, fraction, digits);
+  const end = writeWhole(out, at, whole | 0);
+  const fraction = magnitude - whole * scale;
+  if (fraction === 0) return end;
+  out[end] = POINT;
+  return writeFraction(out, end + 1, (fraction * (1e9 / scale)) | 0);
 }
 
-function writeValue(out: Uint8Array, at: number, value: number, scale: number, decimals: number): number {
+function writeValue(out: Uint8Array, at: number, value: number, scale: number): number {
   const scaled = Math.round(value * scale);
   if (scaled === 0) {
     out[at] = ZERO;
@@ -66,7 +84,7 @@ function writeValue(out: Uint8Array, at: number, value: number, scale: number, d
   let start = at;
   if (scaled < 0) out[start++] = MINUS;
   const magnitude = Math.abs(scaled);
-  if (magnitude < 1e15) return writeRatio(out, start, magnitude, scale, decimals);
+  if (magnitude < 1e15) return writeRatio(out, start, magnitude, scale);
   const quotient = magnitude / scale;
   return Number.isFinite(quotient) ? writeText(out, start, String(quotient)) : writeText(out, at, "null");
 }
@@ -94,7 +112,7 @@ export function writeColumn(
       if ((skipped !== null && skipped[i] !== 0) || Number.isNaN(value)) {
         out.set(NULL, at);
         at += 4;
-      } else at = writeValue(out, at, value, scale, decimals);
+      } else at = writeValue(out, at, value, scale);
       out[at++] = COMMA;
     }
     writer.length = at;

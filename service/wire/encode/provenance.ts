@@ -1,3 +1,5 @@
+import type { HorizontalIrradiance } from "../../climate/climate-series.ts";
+import type { SkyModel } from "../../climate/plane-of-array.ts";
 import type { RuleKind } from "../../core/rules/index.ts";
 import { ruleDefinition } from "../../core/rules/index.ts";
 import type { TrackingRequest, TrackingRun } from "../../studies/tracking-run.ts";
@@ -29,35 +31,69 @@ const TEMPERATURE_MODELS = {
   king: "King et al. 2004, SAND2004-3535, eqs. 11 and 12",
 } as const;
 
-function modelsOf(request: TrackingRequest, kinds: readonly RuleKind[], mode: TrackingRun["mode"]): Model[] {
-  const { temperature } = request.climate;
-  const cell =
-    temperature.kind === "cell"
-      ? []
-      : [
-          {
-            name: `cell-temperature-${temperature.model.kind}`,
-            version: "1",
-            source: TEMPERATURE_MODELS[temperature.model.kind],
-          },
-        ];
-  const rules = [...new Set(kinds)].map((kind) => ({
-    name: kind,
-    version: "1",
-    source: ruleDefinition(kind).sources.join("; "),
-  }));
-  const tracking = {
-    name: `${mode}-tracking`,
-    version: "1",
-    source: "own derivation: powers telescoped by cause, sample by sample",
-  };
-  return [...MODULE_MODELS[request.module.kind], ...cell, ...rules, tracking];
+const SUN =
+  "Blanco-Muriel et al., Solar Energy 70 (2001) 431-441, coefficients of Blanco et al., Solar Energy 212 (2020) 339-341";
+const SKY_MODELS = {
+  perez: "Perez et al., Solar Energy 44(5) (1990) 271-289",
+  "hay-davies": "Hay & Davies 1980 (from memory)",
+  isotropic: "Liu & Jordan 1963 (from memory)",
+} as const satisfies Record<SkyModel, string>;
+
+const TRACKING_MODELS = {
+  steady: "own derivation: each sample at rest, the causes telescoping from available to delivered power",
+  stepped: "own derivation: every control period along straight weather, the causes telescoping likewise",
+} as const satisfies Record<TrackingRun["mode"], string>;
+
+/** A model by its name and source, in its first version. */
+export function model(name: string, source: string): Model {
+  return { name, version: "1", source };
+}
+
+/** What a module of a kind rests on. */
+export function moduleModels({ kind }: TrackingRequest["module"]): readonly Model[] {
+  return MODULE_MODELS[kind];
+}
+
+/** What rules rest on, each once. */
+export function ruleModels(kinds: readonly RuleKind[]): Model[] {
+  return [...new Set(kinds)].map((kind) => model(kind, ruleDefinition(kind).sources.join("; ")));
+}
+
+/** What a climate rests on: how its cells and, from horizontal components, its plane were computed. */
+export function climateModels({ irradiance, temperature }: TrackingRequest["climate"]): Model[] {
+  const cell = temperature.kind === "cell" ? [] : [temperature.model?.kind ?? "faiman"];
+  const plane = irradiance.kind === "plane-of-array" ? [] : planeModels(irradiance);
+  return [...plane, ...cell.map((kind) => model(`cell-temperature-${kind}`, TEMPERATURE_MODELS[kind]))];
+}
+
+function planeModels(irradiance: HorizontalIrradiance): Model[] {
+  const { skyModel = "perez", global, directNormal, diffuse } = irradiance;
+  const alone = global && !directNormal && !diffuse;
+  return [
+    model("sun-position", SUN),
+    ...(alone ? [model("diffuse-fraction", "Erbs, Klein & Duffie, Solar Energy 28 (1982) 293-302 (from memory)")] : []),
+    model(`sky-${skyModel}`, SKY_MODELS[skyModel]),
+  ];
+}
+
+function modelsOf({ module, climate }: TrackingRequest, kinds: readonly RuleKind[], mode: TrackingRun["mode"]) {
+  return [
+    ...moduleModels(module),
+    ...climateModels(climate),
+    ...ruleModels(kinds),
+    model(`${mode}-tracking`, TRACKING_MODELS[mode]),
+  ];
+}
+
+/** Provenance of figures that rest on `models`. `resolved`: the request without presentation members. */
+export function provenanceOf(models: readonly Model[], resolved: object) {
+  return { version: VERSION, models, inputDigest: inputDigest(resolved) };
 }
 
 /** What the figures of a run rest on. `resolved`: the request as the wire states it, without presentation members. */
 export function encodeProvenance(request: TrackingRequest, run: TrackingRun, resolved: object) {
   const kinds = run.tracked.map(({ rule }) => rule.kind);
-  return { version: VERSION, models: modelsOf(request, kinds, run.mode), inputDigest: inputDigest(resolved) };
+  return provenanceOf(modelsOf(request, kinds, run.mode), resolved);
 }
 
 /** The climate as the digest takes it: instants in UTC, columns as doubles. */

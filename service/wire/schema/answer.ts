@@ -69,7 +69,8 @@ export const CoverageSchema = z
   })
   .openapi("Coverage", { description: "How many samples counted." });
 
-const PointTraceSchema = z
+/** One operating point a sample. */
+export const PointTraceSchema = z
   .object({
     voltage: reportedColumn("V", "Voltage at the converter's terminals.").optional(),
     current: reportedColumn("A", "Current, mean over the sample.").optional(),
@@ -95,7 +96,7 @@ export const TracesSchema = z
       "What each sample did: the best the array could deliver and what the rule held, or lost energy by cause. Null where a sample was left out.",
   });
 
-const CircuitSchema = z
+export const CircuitSchema = z
   .object({
     kind: z.string().openapi({ description: "Always single-diode: the circuit is a module that can be sent back." }),
     cellsInSeries: reported("1", "Cells in series inside the module."),
@@ -110,7 +111,8 @@ const CircuitSchema = z
   })
   .openapi("Circuit", { description: "The single-diode circuit of one module at 1000 W/m2 and 25 degC." });
 
-const MisfitsSchema = z
+/** How far a circuit is from its datasheet. */
+export const MisfitsSchema = z
   .object({
     shortCircuitCurrent: reported("1", "Relative misfit of Isc."),
     openCircuitVoltage: reported("1", "Relative misfit of Voc."),

@@ -18,9 +18,43 @@ export const PlaneOfArraySchema = z
   })
   .openapi("PlaneOfArrayIrradiance", { description: "Irradiance on the tilted plane of the modules." });
 
+const SiteSchema = z
+  .strictObject({
+    latitude: quantity("degrees", "North positive.", { minimum: -90, maximum: 90 }),
+    longitude: quantity("degrees", "East positive.", { minimum: -180, maximum: 180 }),
+    elevation: quantity("m", "Above sea level.", { minimum: -500, maximum: 9000 }).default(0),
+    tilt: quantity("degrees", "Of the modules' plane from the horizontal.", { minimum: 0, maximum: 90 }),
+    azimuth: quantity("degrees", "Of the modules' plane, clockwise from north: 180 faces south.", {
+      minimum: 0,
+      maximum: 360,
+    }),
+    albedo: quantity("1", "Share of the light that the ground throws back.", { minimum: 0, maximum: 1 }).default(0.2),
+  })
+  .openapi("Site", { description: "Where the modules stand and how their plane lies." });
+
+const horizontalColumn = (description: string) =>
+  column("W/m2", description, { minimum: -10, maximum: 2000 }).optional();
+
+/** Irradiance as weather stations have it. */
+export const HorizontalSchema = z
+  .strictObject({
+    kind: z.literal("horizontal"),
+    global: horizontalColumn("Global irradiance on the horizontal."),
+    directNormal: horizontalColumn("Direct irradiance facing the sun."),
+    diffuse: horizontalColumn("Diffuse irradiance on the horizontal."),
+    site: SiteSchema,
+    skyModel: z.enum(["perez", "hay-davies", "isotropic"]).default("perez").openapi({
+      description: "How the sky's light is spread: Perez et al. 1990, Hay & Davies 1980, Liu & Jordan 1963.",
+    }),
+  })
+  .openapi("HorizontalIrradiance", {
+    description:
+      "Irradiance as weather stations have it: global alone (its diffuse part by Erbs et al. 1982), or any two of the three; the plane of the modules is computed.",
+  });
+
 /** The light of a climate. */
 export const IrradianceSchema = z
-  .discriminatedUnion("kind", [PlaneOfArraySchema])
+  .discriminatedUnion("kind", [PlaneOfArraySchema, HorizontalSchema])
   .openapi("Irradiance", { description: "The light of a climate." });
 
 const FaimanSchema = z
@@ -83,6 +117,10 @@ const AmbientTemperatureSchema = z
       maximum: 100,
     }).optional(),
     model: CellTemperatureModelSchema.optional(),
+    thermalLag: quantity("s", "Time constant of the modules' heat, followed below a step of 600 s; 0: none.", {
+      minimum: 0,
+      maximum: 7200,
+    }).default(0),
   })
   .openapi("AmbientTemperature", {
     description:
@@ -93,6 +131,15 @@ const AmbientTemperatureSchema = z
 export const TemperatureSchema = z
   .discriminatedUnion("kind", [CellTemperatureSchema, AmbientTemperatureSchema])
   .openapi("Temperature", { description: "The temperature of a climate." });
+
+const InterpolateSchema = z
+  .strictObject({
+    interpolateUpTo: quantity("s", "Longest gap that is filled; longer ones are left out.", {
+      minimum: 1,
+      maximum: 86_400,
+    }),
+  })
+  .openapi("InterpolateGaps", { description: "Short gaps are filled along a straight line." });
 
 /** Equally spaced samples of irradiance and temperature. */
 export const ClimateSchema = z
@@ -107,9 +154,13 @@ export const ClimateSchema = z
       .enum(["mean", "instant"])
       .default("mean")
       .openapi({ description: "A sample is the mean over its step, or the value at its start." }),
-    gaps: z.enum(["refuse", "skip"]).default("refuse").openapi({
-      description: "What happens to missing samples (null): the request is refused, or they are left out.",
-    }),
+    gaps: z
+      .union([z.enum(["refuse", "skip"]), InterpolateSchema])
+      .default("refuse")
+      .openapi({
+        description:
+          "What happens to missing samples (null): the request is refused, they are left out of every sum, or gaps up to a length are filled along a straight line.",
+      }),
     irradiance: IrradianceSchema,
     temperature: TemperatureSchema,
   })

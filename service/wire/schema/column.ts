@@ -29,7 +29,7 @@ interface Scanned {
 }
 
 /** One pass over a column: the first wrong value and how many there are, or null. A thousand issues cost no more than one. */
-export function scanColumn(values: unknown, bounds: ColumnBounds): Scanned | null {
+function scanColumn(values: unknown, bounds: ColumnBounds): Scanned | null {
   if (!Array.isArray(values)) return { finding: "not-an-array", index: null, wrong: 1 };
   if (values.length === 0) return { finding: "empty", index: null, wrong: 1 };
   if (values.length > CEILINGS.samples) return { finding: "too-many", index: null, wrong: 1 };
@@ -44,7 +44,7 @@ export function scanColumn(values: unknown, bounds: ColumnBounds): Scanned | nul
 }
 
 /** The document's schema of a column. */
-export function columnDocument(unit: string, description: string, bounds?: ColumnBounds) {
+function columnDocument(unit: string, description: string, bounds?: ColumnBounds) {
   const range = bounds === undefined ? {} : { minimum: bounds.minimum, maximum: bounds.maximum };
   const size = bounds === undefined ? {} : { minItems: 1, maxItems: CEILINGS.samples };
   return {
@@ -68,7 +68,7 @@ export function column(unit: string, description: string, bounds: ColumnBounds) 
 }
 
 /** The issue that carries a scan's finding to the problem. */
-export function columnIssue(scanned: Scanned, unit: string, bounds: ColumnBounds, input: unknown) {
+function columnIssue(scanned: Scanned, unit: string, bounds: ColumnBounds, input: unknown) {
   const { minimum, maximum } = bounds;
   const params: ColumnFinding = { finding: scanned.finding, unit, minimum, maximum, wrong: scanned.wrong };
   const path = scanned.index === null ? [] : [scanned.index];

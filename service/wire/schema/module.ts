@@ -4,8 +4,8 @@ import { TEST_GENERATOR_TECHNOLOGIES } from "../../core/module/test-generator.ts
 import { quantity } from "./quantity.ts";
 
 const CELLS = quantity("1", "Cells in series inside the module.", { minimum: 1, maximum: 1000, integer: true });
-const CURRENT = { exclusiveMinimum: 0, maximum: 100 };
-const VOLTAGE = { exclusiveMinimum: 0, maximum: 1000 };
+const CURRENT = { minimum: 0.0001, maximum: 100 };
+const VOLTAGE = { minimum: 0.1, maximum: 1000 };
 const BANDGAP = quantity("eV", "Band gap of the cells at 25 degC; silicon by default.", {
   minimum: 0.5,
   maximum: 3,
@@ -44,12 +44,12 @@ export const SingleDiodeSchema = z
     cellsInSeries: CELLS,
     photocurrent: quantity("A", "Photocurrent at standard test conditions.", CURRENT),
     saturationCurrent: quantity("A", "Saturation current of the diode at 25 degC.", {
-      exclusiveMinimum: 0,
+      minimum: 1e-30,
       maximum: 1,
     }),
     seriesResistance: quantity("ohm", "Series resistance of the module.", { minimum: 0, maximum: 100 }),
     shuntResistance: quantity("ohm", "Shunt resistance of the module at 1000 W/m2; null: infinite.", {
-      exclusiveMinimum: 0,
+      minimum: 0.01,
       maximum: 1e9,
     }).nullable(),
     idealityVoltage: quantity("V", "n Ns k T/q of the whole module at 25 degC (about 0.026 V to 0.05 V a cell).", {
@@ -73,10 +73,10 @@ export const TestGeneratorSchema = z
     kind: z.literal("test-generator"),
     technology: z.enum(TEST_GENERATOR_TECHNOLOGIES).openapi({ description: "Which of the standard's constants hold." }),
     maximumPower: quantity("W", "Nominal maximum power at standard test conditions.", {
-      exclusiveMinimum: 0,
+      minimum: 0.01,
       maximum: 1e6,
     }),
-    maximumPowerVoltage: quantity("V", "Nominal voltage at maximum power.", { exclusiveMinimum: 0, maximum: 1500 }),
+    maximumPowerVoltage: quantity("V", "Nominal voltage at maximum power.", { minimum: 0.1, maximum: 1500 }),
   })
   .openapi("TestGeneratorModule", {
     description: "The generator of EN 50530:2010 Annex C and IEC 62891:2020 Annex A.",

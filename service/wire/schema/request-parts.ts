@@ -2,8 +2,9 @@ import { z } from "@hono/zod-openapi";
 import { quantity } from "./quantity.ts";
 
 /** How the rules are computed. */
-export const ModeSchema = z.enum(["auto", "steady"]).default("auto").openapi({
-  description: "steady: each sample at rest. auto: as the study finds fit, with its reason in the answer.",
+export const ModeSchema = z.enum(["auto", "steady", "stepped"]).default("auto").openapi({
+  description:
+    "steady: each sample at rest. stepped: every rule at its own control period. auto: stepped up to a step of 300 s, steady above; the answer says which and why.",
 });
 
 /** The site's coldest temperature on record. */

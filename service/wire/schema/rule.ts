@@ -2,8 +2,8 @@ import { z } from "@hono/zod-openapi";
 import type { RuleKind } from "../../core/rules/index.ts";
 import { RULES } from "../../core/rules/index.ts";
 import type { NumberParameter, Parameter, RuleDefinition, SeriesParameter } from "../../core/rules/rule.ts";
-import type { ColumnBounds, RawColumn } from "./column.ts";
-import { columnDocument, columnIssue, scanColumn } from "./column.ts";
+import type { RawColumn } from "./column.ts";
+import { column } from "./column.ts";
 import { quantity, reported, withUnit } from "./quantity.ts";
 
 /** A rule of a request: its kind and the settings that were given. */
@@ -35,22 +35,10 @@ function numberSchema(parameter: NumberParameter): z.ZodType {
 /** A number, or a column of one number a sample. */
 function seriesSchema(parameter: SeriesParameter): z.ZodType {
   const { unit, minimum, maximum } = parameter;
-  const bounds: ColumnBounds = { minimum, maximum };
+  const single = quantity(unit, "One value for all samples.", { minimum, maximum });
   return z
-    .custom<number | RawColumn>()
-    .check((context) => {
-      const single = !Array.isArray(context.value);
-      const scanned = scanColumn(single ? [context.value ?? "missing"] : context.value, bounds);
-      if (scanned === null) return;
-      context.issues.push(columnIssue(single ? { ...scanned, index: null } : scanned, unit, bounds, context.value));
-    })
-    .openapi({
-      anyOf: [
-        { type: "number", minimum, maximum, description: withUnit(unit, "One value for all samples.") },
-        columnDocument(unit, "One value a sample.", bounds),
-      ],
-      description: withUnit(unit, sentenceOf(parameter)),
-    });
+    .union([single, column(unit, "One value a sample.", { minimum, maximum })])
+    .openapi({ description: withUnit(unit, sentenceOf(parameter)) });
 }
 
 function settingSchema(parameter: Parameter): z.ZodType {
