@@ -305,17 +305,17 @@ export interface components {
         /** @description Lost energy of each sample by cause. */
         CauseTrace: {
             /** @description The reference is stale: held from the last sample. Unit: kWh. */
-            heldSample?: (number | null)[];
+            heldSample: (number | null)[];
             /** @description Nothing is delivered while sampling, sweeping or asleep. Unit: kWh. */
-            interruption?: (number | null)[];
+            interruption: (number | null)[];
             /** @description Steps, hunting and ripple around the target. Unit: kWh. */
-            regulation?: (number | null)[];
+            regulation: (number | null)[];
             /** @description The rule's own target misses the maximum. Unit: kWh. */
-            setPoint?: (number | null)[];
+            setPoint: (number | null)[];
             /** @description The maximum lies outside the converter's voltage window. Unit: kWh. */
-            voltageWindow?: (number | null)[];
+            voltageWindow: (number | null)[];
             /** @description The rule sits on a lower peak of the power curve. Unit: kWh. */
-            wrongPeak?: (number | null)[];
+            wrongPeak: (number | null)[];
         };
         /** @description Something to know before acting on the figures. */
         Caution: {
@@ -515,7 +515,7 @@ export interface components {
         /** @description The I-V and P-V curve and where each rule sits on it. */
         CurveAnswer: {
             /** @description Current at each voltage. Unit: A. */
-            current?: (number | null)[];
+            current: (number | null)[];
             module: components["schemas"]["ModuleAnswer"];
             /** @description Voltage at no current. Unit: V. */
             openCircuitVoltage: number;
@@ -524,12 +524,12 @@ export interface components {
             /** @description One for each rule, in the order of the request. */
             places: components["schemas"]["RulePlace"][];
             /** @description Power at each voltage. Unit: W. */
-            power?: (number | null)[];
+            power: (number | null)[];
             provenance: components["schemas"]["Provenance"];
             /** @description Current at 0 V, behind the wiring. Unit: A. */
             shortCircuitCurrent: number;
             /** @description From 0 to open circuit, equally spaced. Unit: V. */
-            voltage?: (number | null)[];
+            voltage: (number | null)[];
         };
         /** @description A point of the curve. */
         CurvePoint: {
@@ -842,7 +842,7 @@ export interface components {
              */
             controlPeriod?: number;
             /**
-             * @description Relative change of the current that wakes a resting rule. Source: own choice: the resolution of a common current sensor. Unit: 1, of the current.
+             * @description Relative change of the current, since it came to rest, that wakes a resting rule. Source: own choice: the resolution of a common current sensor. Unit: 1, of the current.
              * @default 0.001
              */
             currentTolerance?: number;
@@ -1099,7 +1099,7 @@ export interface components {
             /** @description Current, mean over the sample. Unit: A. */
             current?: (number | null)[];
             /** @description Power, mean over the sample, interruptions counted. Unit: W. */
-            power?: (number | null)[];
+            power: (number | null)[];
             /** @description Voltage at the converter's terminals. Unit: V. */
             voltage?: (number | null)[];
         };
@@ -1303,7 +1303,7 @@ export interface components {
         ResolvedIncrementalConductanceRule: {
             /** @description Time between two decisions of the rule. Unit: s. */
             controlPeriod: number;
-            /** @description Relative change of the current that wakes a resting rule. Unit: 1, of the current. */
+            /** @description Relative change of the current, since it came to rest, that wakes a resting rule. Unit: 1, of the current. */
             currentTolerance: number;
             /** @description Relative slope of the power curve below which the rule rests; 0 never rests. Unit: 1, of the relative slope 1 + (V/I) dI/dV. */
             holdTolerance: number;
@@ -1414,16 +1414,16 @@ export interface components {
         /** @description Null where no row was asked for. */
         RowTrace: {
             /** @description At the start of each span; straight between. The first 300 s settle. Unit: W/m2. */
-            irradiance?: (number | null)[];
+            irradiance: (number | null)[];
             /** @description Least delivered by a control period in each span. Unit: W. */
-            leastPower?: (number | null)[];
+            leastPower: (number | null)[];
             /** @description Least of the control periods in each span. Unit: V. */
-            leastVoltage?: (number | null)[];
+            leastVoltage: (number | null)[];
             maximumPower: components["schemas"]["PointTrace"];
             /** @description Most delivered by a control period in each span. Unit: W. */
-            mostPower?: (number | null)[];
+            mostPower: (number | null)[];
             /** @description Most of the control periods in each span. Unit: V. */
-            mostVoltage?: (number | null)[];
+            mostVoltage: (number | null)[];
             operating: components["schemas"]["PointTrace"];
             /** @description Of the row shown. Unit: W/m2/s. */
             slope: number;

@@ -77,7 +77,7 @@ function columnIssue(scanned: Scanned, unit: string, bounds: ColumnBounds, input
 
 /** A column of an answer: null where a sample was left out. */
 export function reportedColumn(unit: string, description: string) {
-  return z.custom<RawColumn>().openapi(columnDocument(unit, description));
+  return z.custom<RawColumn>(Array.isArray).openapi(columnDocument(unit, description));
 }
 
 /** A column as numbers alone: shape [n], NaN where null stood. */
