@@ -1,5 +1,4 @@
 import type { z } from "@hono/zod-openapi";
-import { CoreError } from "../core/errors.ts";
 import { StudyError } from "../studies/study-error.ts";
 import { explain } from "./decode/explain.ts";
 import { parseBody } from "./decode/parse-body.ts";
@@ -55,7 +54,6 @@ function perform(answer: () => Uint8Array): Answer {
       const { pointer, code, message, expected } = error;
       return refuse(flawed([{ pointer, code, detail: message, ...(expected === undefined ? {} : { expected }) }]));
     }
-    if (error instanceof CoreError) return refuse(flawed([{ pointer: "", code: error.code, detail: error.message }]));
     return failure(error);
   }
 }

@@ -12,7 +12,7 @@ const point = (unit: string, name: string, bounds: { minimum: number; maximum: n
     .array(quantity(unit, name, bounds))
     .min(5)
     .max(MOST_POINTS)
-    .openapi({ description: `${name}, point by point. Unit: ${unit}.` });
+    .openapi({ description: `${name}, point by point. Unit: ${unit}.`, "x-column": true });
 
 /** Points of a measured I-V curve of one module. */
 export const MeasuredCurveSchema = z
