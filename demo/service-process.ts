@@ -15,11 +15,11 @@ const SERVICE = new URL("../service/main.js", import.meta.url).pathname;
 const STARTS_WITHIN = 30_000;
 
 /** Starts the service on a free port of this machine and waits until it is ready. Throws when it is not within 30 s. */
-export async function startService(): Promise<RunningService> {
+export async function startService(main: string = SERVICE): Promise<RunningService> {
   const port = await freePort();
   const baseUrl = `http://127.0.0.1:${port}`;
-  const child = spawn(process.execPath, [SERVICE], {
-    env: { ...process.env, HOST: "127.0.0.1", PORT: String(port), LOG_LEVEL: "error", DRAIN_SECONDS: "0" },
+  const child = spawn(process.execPath, [main], {
+    env: { ...process.env, HOST: "127.0.0.1", PORT: String(port), LOG_LEVEL: "error", DRAIN: "0" },
     stdio: ["ignore", "inherit", "inherit"],
   });
   process.once("exit", () => child.kill());

@@ -19,13 +19,7 @@ const CAUSE_WORDS: Record<string, string> = {
 
 /** The table: a row a landing stage; available energy and what each rule loses, kWh a year; the largest cause. */
 export function table(rows: readonly StageAnswer[]): string {
-  const head = [
-    "landing stage",
-    "feeds",
-    "available",
-    ...CANDIDATES.map(({ label }) => label),
-    "largest cause",
-  ];
+  const head = ["landing stage", "feeds", "available", ...CANDIDATES.map(({ label }) => label), "largest cause"];
   const body = rows.map(({ stage, answer }) => [
     stage.name,
     stage.feeds,

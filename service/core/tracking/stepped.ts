@@ -21,7 +21,7 @@ const MOST_HALVINGS = 40;
  * between the samples; period k is [k Ta, (k + 1) Ta) from the series' start, evaluated at its middle, and belongs to
  * the sample that holds its middle; the last is cut. Darkness and gaps put the rules to sleep.
  *
- * What follows the weather smoothly is carried by cubics within 1e-8 of the maximum power; memory does not grow with
+ * What follows the weather smoothly is carried by cubics within 3e-8 of the maximum power; memory does not grow with
  * the number of periods.
  * @param maximum receives the mean maximum power point a sample, each column of shape [n]; null to leave it
  */

@@ -21,6 +21,8 @@ import { locate, valueAt } from "./weather-path.ts";
 /** Values a stepper wants as cubics: see `Followed`. */
 export const FOLLOWED = { available: 0, clipped: 1, best: 2, fresh: 3, power: 4, voltage: 5, current: 6 } as const;
 export const FOLLOWED_COUNT = 7;
+/** Largest error of a followed power, of the maximum power. */
+const POWER = 3e-8;
 
 /** Periods [first, end) of one piece; `weight` of the last one of all, in periods. */
 export interface Periods {
@@ -75,7 +77,8 @@ export class Stepper {
     this.smooth = isSmooth(contender);
     const sampling = rule.behaviour === "perfect" ? null : rule.sampling;
     this.clock = sampling === null ? null : new SampleClock(sampling, converter, array, weather);
-    this.tolerances = [1e-8, 1e-8, 1e-8, followsFresh(contender) ? 1e-8 : 0, this.smooth ? 1e-8 : 0, 0, 0];
+    const fresh = followsFresh(contender) ? POWER : 0;
+    this.tolerances = [POWER, POWER, POWER, fresh, this.smooth ? POWER : 0, 0, 0];
   }
 
   /** Periods whose middle lies in [from, to), s; the last piece of all takes the last period whole. */

@@ -18,7 +18,7 @@ export interface Piece {
 const ARRAY_QUANTITIES = 9;
 const MAXIMUM = 6;
 /** Tolerance of each, and the quantity by whose largest value it is scaled; ln I0 is taken absolutely. */
-const TOLERANCES = [1e-9, 2e-8, 1e-9, 1e-8, 1e-9, 1e-9, 1e-6, 1e-6, 1e-8];
+const TOLERANCES = [1e-9, 5e-8, 1e-9, 1e-8, 1e-9, 1e-9, 1e-6, 1e-6, 3e-8];
 const SCALED_BY = [0, -1, 2, 3, 4, 0, 6, 7, 8];
 const POINTS = CUBIC_NODES.length + CUBIC_CHECKS.length;
 const SHARES = [...CUBIC_NODES, ...CUBIC_CHECKS];
@@ -33,7 +33,7 @@ export interface Followed {
 
 /**
  * A piece of the weather short enough for cubics: circuit, maximum power point and whatever else is followed are
- * cubics of time, within 1e-8 of the maximum power. The nodes solve the array exactly; three checks between them decide.
+ * cubics of time, within 3e-8 of the maximum power. The nodes solve the array exactly; three checks between them decide.
  */
 export class Stretch {
   readonly condition = emptyCondition();
