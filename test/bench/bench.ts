@@ -3,18 +3,26 @@ import { arch, cpus } from "node:os";
 import { costAgainstLength, maximumPowerAgainstC, maximumPowerAgainstNumpy, steppingAgainstC } from "./kernels.ts";
 import type { Row } from "./measure.ts";
 import { describeRow } from "./measure.ts";
+import { estimateAgainstAnalyst, horizontalAgainstPlane } from "./service.ts";
 
-const PARTS = [maximumPowerAgainstC, maximumPowerAgainstNumpy, steppingAgainstC, costAgainstLength];
+const PARTS: (() => Row[] | Promise<Row[]>)[] = [
+  maximumPowerAgainstC,
+  maximumPowerAgainstNumpy,
+  steppingAgainstC,
+  estimateAgainstAnalyst,
+  costAgainstLength,
+  horizontalAgainstPlane,
+];
 
 /** Prints the table of ratios; `--json` the figures; `--save` refreshes RESULTS.md beside this file. Never fails on a time. */
-function main(): void {
+async function main(): Promise<void> {
   const rows: Row[] = [];
   const lines = [
     "| # | work | peer | goal | ours / peer (median, spread) | ours (median) |",
     "|---|---|---|---|---|---|",
   ];
   for (const part of PARTS) {
-    for (const row of part()) {
+    for (const row of await part()) {
       rows.push(row);
       lines.push(describeRow(row));
     }
@@ -27,4 +35,4 @@ function main(): void {
   writeFileSync(new URL("RESULTS.md", import.meta.url), text);
 }
 
-main();
+await main();
