@@ -6,9 +6,8 @@ WORKDIR /app
 COPY package.json package-lock.json .npmrc ./
 COPY sdk/package.json sdk/package.json
 RUN npm ci --ignore-scripts
-COPY tsconfig.json tsconfig.service.json ./
+COPY tsconfig.json tsconfig.build.json tsconfig.service.json ./
 COPY service service
-COPY openapi/openapi.json openapi/openapi.json
 RUN npx tsc -p tsconfig.service.json
 
 FROM ${NODE_IMAGE} AS dependencies
@@ -22,7 +21,6 @@ ENV NODE_ENV=production HOST=0.0.0.0 PORT=8080
 WORKDIR /app
 COPY --from=dependencies /app/node_modules node_modules
 COPY --from=build /app/dist dist
-COPY --from=build /app/openapi/openapi.json openapi/openapi.json
 COPY package.json ./
 USER 1000:1000
 EXPOSE 8080
