@@ -20,9 +20,16 @@ export interface PlainConverter {
   currentSensor: PlainSensor;
 }
 
+/** A voltage, a current and a power. */
+export interface PlainPoint {
+  voltage: number;
+  current: number;
+  power: number;
+}
+
 const HALVINGS = 62;
-/** Simpson intervals of half a ripple cycle. */
-const RIPPLE_INTERVALS = 160;
+/** Simpson intervals of an arc of ripple. */
+const RIPPLE_INTERVALS = 80;
 
 /** Halves [low, high] until nothing is left of it: where `isLeft` stops to hold. */
 function halve(isLeft: (x: number) => boolean, low: number, high: number): number {
@@ -33,6 +40,18 @@ function halve(isLeft: (x: number) => boolean, low: number, high: number): numbe
     else right = middle;
   }
   return (left + right) / 2;
+}
+
+/** Integral by Simpson's rule; 0 over nothing. */
+function simpson(f: (x: number) => number, from: number, to: number): number {
+  const width = (to - from) / RIPPLE_INTERVALS;
+  if (!(width > 0)) return 0;
+  let sum = 0;
+  for (let k = 0; k <= RIPPLE_INTERVALS; k++) {
+    const weight = k === 0 || k === RIPPLE_INTERVALS ? 1 : 2 + 2 * (k % 2);
+    sum += (weight * width * f(from + k * width)) / 3;
+  }
+  return sum;
 }
 
 /** What a sensor reads. */
@@ -117,22 +136,32 @@ export class PlainCurve {
     return this.power(this.clamp(this.vmp));
   }
 
-  /** Mean current and mean power within the limits over a cycle of ripple. */
-  swung(voltage: number): { current: number; power: number } {
+  /**
+   * Where the converter stands when asked for a voltage: raised by the current limit; at the power limit right of the
+   * peak, where the array gives just that much; under ripple the centre, mean current and mean power of a cycle.
+   */
+  operate(voltage: number): PlainPoint {
     const { ripple, mostPower } = this.converter;
     const centre = Math.max(voltage, this.floor);
-    if (ripple === 0) return { current: this.current(centre), power: this.power(voltage) };
-    const reach = centre > 0 ? (this.voc / centre - 1) / ripple : 1;
-    const end = Math.asin(Math.min(1, Math.max(-1, reach)));
-    const width = (end + Math.PI / 2) / RIPPLE_INTERVALS;
-    let [current, power] = [0, 0];
-    for (let k = 0; k <= RIPPLE_INTERVALS; k++) {
-      const at = centre * (1 + ripple * Math.sin(k * width - Math.PI / 2));
-      const here = this.current(at);
-      const simpson = k === 0 || k === RIPPLE_INTERVALS ? 1 : 2 + 2 * (k % 2);
-      current += (simpson * here * width) / 3 / Math.PI;
-      power += (simpson * here * at * width) / 3 / Math.PI;
-    }
-    return { current, power: Math.min(mostPower, power) };
+    if (ripple > 0) return this.swing(centre);
+    const current = this.current(centre);
+    if (centre * current <= mostPower) return { voltage: centre, current, power: centre * current };
+    const most = (at: number): boolean => at * this.current(at) > mostPower;
+    const curtailed = halve(most, Math.max(centre, this.vmp), this.voc);
+    return { voltage: curtailed, current: mostPower / curtailed, power: mostPower };
+  }
+
+  /** The mean over half a cycle, which the other half repeats; smooth up to the floor and up to open circuit. */
+  private swing(centre: number): PlainPoint {
+    const { ripple, mostPower } = this.converter;
+    const phase = (voltage: number): number =>
+      Math.asin(Math.min(1, Math.max(-1, centre > 0 ? (voltage / centre - 1) / ripple : 1)));
+    const [start, open] = [-Math.PI / 2, phase(this.voc)];
+    const bend = this.floor > 0 ? Math.min(open, phase(this.floor)) : start;
+    const at = (angle: number): number => Math.max(this.floor, centre * (1 + ripple * Math.sin(angle)));
+    const mean = (f: (voltage: number) => number): number =>
+      (simpson((angle) => f(at(angle)), start, bend) + simpson((angle) => f(at(angle)), bend, open)) / Math.PI;
+    const power = mean((voltage) => voltage * this.current(voltage));
+    return { voltage: centre, current: mean((voltage) => this.current(voltage)), power: Math.min(mostPower, power) };
   }
 }

@@ -1,4 +1,4 @@
-import type { PlainConverter, PlainCurve } from "./stepper-curve.ts";
+import type { PlainConverter, PlainCurve, PlainPoint } from "./stepper-curve.ts";
 import { read, truthReadAs } from "./stepper-curve.ts";
 
 /** A rule as a request names it, every setting given. */
@@ -15,13 +15,6 @@ export interface Moment {
   reading: number;
 }
 
-/** What a climber remembers of one period, as its sensors read it. */
-export interface Sight {
-  voltage: number;
-  current: number;
-  power: number;
-}
-
 /** A number among a rule's settings; 0 where it has none of that name. */
 export function settingOf(rule: PlainRule, name: string): number {
   const value = rule.settings[name];
@@ -34,14 +27,14 @@ export function isClimber(rule: PlainRule): boolean {
   return rule.kind === "perturb-and-observe" || rule.kind === "incremental-conductance";
 }
 
-/** What a sensed climber or sweep sees at a voltage. Ripple: the readings keep the ratio of mean power to V times mean I. */
-export function sightAt(curve: PlainCurve, converter: PlainConverter, voltage: number): Sight {
-  const { current, power } = curve.swung(voltage);
-  const seenVoltage = read(converter.voltageSensor, voltage);
-  const seenCurrent = read(converter.currentSensor, current);
-  const product = voltage * current;
-  const ratio = product > 0 ? power / product : 1;
-  return { voltage: seenVoltage, current: seenCurrent, power: seenVoltage * seenCurrent * ratio };
+/** What a climber or a sweep sees of a period. Ripple: the readings keep the ratio of mean power to V times mean I. */
+export function sightOf(point: PlainPoint, converter: PlainConverter): PlainPoint {
+  const voltage = read(converter.voltageSensor, point.voltage);
+  const current = read(converter.currentSensor, point.current);
+  if (voltage === point.voltage && current === point.current) return point;
+  const product = point.voltage * point.current;
+  const ratio = converter.ripple > 0 && product > 0 ? point.power / product : 1;
+  return { voltage, current, power: voltage * current * ratio };
 }
 
 /** What a sample of a rule reads: physics.md 7, "Sampling" and "Scan". */
@@ -50,11 +43,11 @@ export function takeSample(rule: PlainRule, converter: PlainConverter, curve: Pl
   if (rule.kind === "short-current-pulse") return read(converter.currentSensor, curve.current(0));
   const points = settingOf(rule, "points");
   const high = Math.max(converter.lowest, Math.min(converter.highest, curve.voc));
-  let [best, most] = [converter.lowest, Number.NEGATIVE_INFINITY];
+  let [best, most] = [converter.lowest, -Number.MAX_VALUE];
   for (let j = 0; j < points; j++) {
     const voltage = converter.lowest + ((high - converter.lowest) * j) / (points - 1);
-    const { power } = sightAt(curve, converter, voltage);
-    if (power > most) [best, most] = [voltage, power];
+    const { power } = sightOf(curve.operate(voltage), converter);
+    if (isLess(most, power)) [best, most] = [voltage, power];
   }
   return best;
 }
@@ -82,18 +75,24 @@ export function target(rule: PlainRule, converter: PlainConverter, series: numbe
   }
 }
 
+/** Less by more than rounding: equal products of two readings, or powers cut to one limit, may differ in the last bit. */
+function isLess(power: number, other: number): boolean {
+  return power < other && other - power > 1e-12 * Math.abs(other);
+}
+
 /** The next direction of a climber that compares powers: physics.md 7, "Perturb and observe". */
-function byPower(now: Sight, before: Sight | null, direction: number, cut: boolean): number {
+function byPower(now: PlainPoint, before: PlainPoint | null, direction: number, cut: boolean): number {
   if (now.power <= 0 && now.voltage > 0) return -1;
-  if (cut || (before !== null && now.power < before.power)) return -direction;
+  if (cut || (before !== null && isLess(now.power, before.power))) return -direction;
   return direction;
 }
 
 /** The next direction of a climber that compares conductances: physics.md 7, "Incremental conductance". */
-function byConductance(rule: PlainRule, now: Sight, before: Sight | null): number {
+function byConductance(rule: PlainRule, now: PlainPoint, before: PlainPoint | null): number {
   if (now.current <= 0 || before === null) return -1;
   const [v1, i1, v2, i2] = [before.voltage, before.current, now.voltage, now.current];
-  const sloping = v2 !== v1;
+  // A converter held at its power limit stands at one voltage but for rounding.
+  const sloping = Math.abs(v2 - v1) > 1e-9 * v2;
   const e = sloping ? 1 + ((v2 / i2) * (i2 - i1)) / (v2 - v1) : (i2 - i1) / i2;
   const tolerance = settingOf(rule, sloping ? "holdTolerance" : "currentTolerance");
   if (e > tolerance) return 1;
@@ -101,7 +100,13 @@ function byConductance(rule: PlainRule, now: Sight, before: Sight | null): numbe
 }
 
 /** The next direction of a climber: up 1, stay 0, down -1. */
-export function decide(rule: PlainRule, now: Sight, before: Sight | null, direction: number, cut: boolean): number {
+export function decide(
+  rule: PlainRule,
+  now: PlainPoint,
+  before: PlainPoint | null,
+  direction: number,
+  cut: boolean,
+): number {
   if (rule.kind === "incremental-conductance") return byConductance(rule, now, before);
   return byPower(now, before, direction, cut);
 }

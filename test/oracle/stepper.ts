@@ -1,8 +1,8 @@
 import type { ReferenceDiode } from "./diode-equation.ts";
-import type { PlainConverter } from "./stepper-curve.ts";
+import type { PlainConverter, PlainPoint } from "./stepper-curve.ts";
 import { PlainCurve } from "./stepper-curve.ts";
-import type { PlainRule, Sight } from "./stepper-rules.ts";
-import { decide, isClimber, settingOf, sightAt, takeSample, target } from "./stepper-rules.ts";
+import type { PlainRule } from "./stepper-rules.ts";
+import { decide, isClimber, settingOf, sightOf, takeSample, target } from "./stepper-rules.ts";
 import type { PlainWeather } from "./stepper-weather.ts";
 import { PlainPath } from "./stepper-weather.ts";
 
@@ -33,7 +33,9 @@ interface Awake {
   voltage: number;
   direction: number;
   cut: boolean;
-  before: Sight | null;
+  last: PlainPoint | null;
+  /** What the last period is compared with: the one before it; at rest the first of the rest. */
+  before: PlainPoint | null;
 }
 
 /** Steps a rule through its weather period by period: physics.md 7 "Stepped" and 8, with no thought for speed. */
@@ -102,6 +104,7 @@ class PlainStepper {
       voltage: curve.clamp(curve.voc),
       direction: -1,
       cut: false,
+      last: null,
       before: null,
     };
     return this.awake;
@@ -127,9 +130,9 @@ class PlainStepper {
     const d = curve.available() < converter.wakePower ? 1 : this.interrupted(k, weight, awake);
     const step = settingOf(rule, "stepFraction") * nominalVoc;
     if (isClimber(rule)) {
-      const { power } = curve.swung(awake.voltage);
-      enter([0, 0, best - power, d * power]);
-      this.climb(curve, awake, step);
+      const point = curve.operate(awake.voltage);
+      enter([0, 0, best - point.power, d * point.power]);
+      this.climb(curve, awake, step, point);
       return;
     }
     const now = { curve, ...this.path.at(middle, awake.run), reading: awake.reading };
@@ -138,7 +141,7 @@ class PlainStepper {
     const fresh = target(rule, converter, modulesInSeries, { ...now, reading });
     const exact = step === 0 || rule.kind === "power-curve-scan";
     if (exact) awake.voltage = held;
-    const { power } = curve.swung(awake.voltage);
+    const { power } = curve.operate(awake.voltage);
     enter([best - curve.power(fresh), curve.power(fresh) - curve.power(held), curve.power(held) - power, d * power]);
     if (!exact) awake.voltage = curve.clamp(awake.voltage + (awake.voltage < held ? step : -step));
   }
@@ -162,7 +165,7 @@ class PlainStepper {
     awake.voltage = curve.clamp(awake.reading);
     awake.direction = -1;
     awake.cut = false;
-    awake.before = null;
+    awake.last = awake.before = null;
   }
 
   private timing(): { every: number; lasting: number } {
@@ -186,11 +189,15 @@ class PlainStepper {
     return overlap / (to - from);
   }
 
-  private climb(curve: PlainCurve, awake: Awake, step: number): void {
+  private climb(curve: PlainCurve, awake: Awake, step: number, point: PlainPoint): void {
     const { rule, converter } = this.scene;
-    const seen = sightAt(curve, converter, awake.voltage);
+    const seen = sightOf(point, converter);
+    // A rule at rest measures change from where it came to rest, so that a slow drift adds up (argued deviation from
+    // physics 7, where it is measured from period to period: see the log, "A resting climber now measures change").
+    const rests = awake.direction === 0 && awake.last?.voltage === awake.before?.voltage;
+    if (!rests) awake.before = awake.last;
+    awake.last = seen;
     awake.direction = decide(rule, seen, awake.before, awake.direction, awake.cut);
-    awake.before = seen;
     const wanted = awake.voltage + awake.direction * step;
     awake.voltage = curve.clamp(wanted);
     awake.cut = awake.voltage !== wanted;

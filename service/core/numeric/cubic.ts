@@ -12,6 +12,11 @@ export function fitCubic(values: Float64Array, from: number, coefficients: Float
   const f2 = values[from + 2];
   const f3 = values[from + 3];
   coefficients[to] = f0;
+  if (f0 === f1 && f1 === f2 && f2 === f3) {
+    // A constant to the last bit: what compares one instant with another must find them equal.
+    coefficients.fill(0, to + 1, to + 4);
+    return;
+  }
   coefficients[to + 1] = 0.5 * (-11 * f0 + 18 * f1 - 9 * f2 + 2 * f3);
   coefficients[to + 2] = 0.5 * (18 * f0 - 45 * f1 + 36 * f2 - 9 * f3);
   coefficients[to + 3] = 0.5 * (-9 * f0 + 27 * f1 - 27 * f2 + 9 * f3);

@@ -1,6 +1,6 @@
 import type { OperatingPoint } from "../diode/maximum-power.ts";
 import type { ClimbingRule, Seen } from "../rules/rule.ts";
-import { readingOf } from "./converter.ts";
+import { isExact, readingOf } from "./converter.ts";
 import type { Terminals } from "./terminals.ts";
 
 /** What a climber knows at waking: it is on its way down and has seen nothing. */
@@ -22,9 +22,10 @@ export function firstSight(): Seen {
  * mean power differ from voltage times mean current; the readings keep that ratio.
  */
 export function readPower({ converter }: Terminals, point: OperatingPoint): number {
+  if (isExact(converter.voltageSensor) && isExact(converter.currentSensor)) return point.power;
   const reading = readingOf(converter.voltageSensor, point.voltage) * readingOf(converter.currentSensor, point.current);
   const apparent = point.voltage * point.current;
-  return apparent > 0 ? (reading * point.power) / apparent : reading;
+  return converter.rippleAmplitude > 0 && apparent > 0 ? reading * (point.power / apparent) : reading;
 }
 
 /**

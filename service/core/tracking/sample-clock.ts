@@ -33,7 +33,8 @@ export class SampleClock {
 
   /** Whether a sample fell due since the last call, up to `time`, s. */
   isDue(time: number): boolean {
-    const due = 1 + Math.floor((time - this.wokeAt) / this.sampling.period);
+    // A sample at the very instant counts, whatever rounding makes of the instant.
+    const due = 1 + Math.floor((time - this.wokeAt) / this.sampling.period + 1e-9);
     const is = due !== this.taken;
     this.taken = due;
     return is;

@@ -53,7 +53,7 @@ class Walk {
     this.weather = weather;
     this.steppers = steppers;
     this.maximum = maximum;
-    this.shortest = FEWEST_PERIODS * Math.min(...steppers.map((stepper) => stepper.period));
+    this.shortest = FEWEST_PERIODS * Math.min(...steppers.map((stepper) => stepper.grid.period));
     this.stretch = new Stretch(array, {
       count: steppers.length * FOLLOWED_COUNT,
       tolerances: steppers.flatMap((stepper) => stepper.tolerances),
@@ -105,7 +105,11 @@ class Walk {
 
   private takePiece(piece: Piece, isEnd: boolean): void {
     if (piece.fromIrradiance <= 0 && piece.toIrradiance <= 0) {
-      for (const stepper of this.steppers) stepper.sleep();
+      // A rule sleeps where a period of its own falls into the dark, not between two.
+      for (const stepper of this.steppers) {
+        const { first, end } = stepper.grid.periodsIn(piece.from, piece.to, isEnd);
+        if (end > first) stepper.sleep();
+      }
       return;
     }
     const ends = [piece.to];
@@ -127,18 +131,18 @@ class Walk {
 
   private stepAlong(piece: Piece, from: number, to: number, isEnd: boolean): void {
     for (const [c, stepper] of this.steppers.entries()) {
-      stepper.stepAlong(this.stretch, piece, this.run, stepper.periodsIn(from, to, isEnd), c * FOLLOWED_COUNT);
+      stepper.stepAlong(this.stretch, piece, this.run, stepper.grid.periodsIn(from, to, isEnd), c * FOLLOWED_COUNT);
     }
   }
 
   private stepExactly(piece: Piece, from: number, to: number, isEnd: boolean): void {
-    for (const stepper of this.steppers) stepper.stepExactly(piece, this.run, stepper.periodsIn(from, to, isEnd));
+    for (const stepper of this.steppers) stepper.stepExactly(piece, this.run, stepper.grid.periodsIn(from, to, isEnd));
   }
 
   /** Writes a sample's mean maximum power point: voltage over its lit time, current and power over all of it. */
   private closeMaximum(maximum: PointTrace, sample: number): void {
-    const [{ tally, period }] = this.steppers;
-    const share = period / this.weather.step;
+    const [{ tally, grid }] = this.steppers;
+    const share = grid.period / this.weather.step;
     if (tally.sunlit > 0) maximum.voltage[sample] = tally.maximum[0] / tally.sunlit;
     maximum.current[sample] = tally.maximum[1] * share;
     maximum.power[sample] = tally.maximum[2] * share;
@@ -146,8 +150,8 @@ class Walk {
 
   /** Enters a sample's tally, as means over the sample, and clears it. */
   private close(stepper: Stepper, place: { sample: number; span: number; irradianceClass: number }): void {
-    const { tally, period, contender } = stepper;
-    const share = period / this.weather.step;
+    const { tally, grid, contender } = stepper;
+    const share = grid.period / this.weather.step;
     const cascade: Cascade = {
       available: tally.available * share,
       best: tally.best * share,

@@ -6,8 +6,10 @@ import type { OperatingPoint } from "../diode/maximum-power.ts";
 import { maximumPower } from "../diode/maximum-power.ts";
 import type { Seen } from "../rules/rule.ts";
 import { climbOn, firstSight } from "./climber.ts";
-import type { Converter } from "./converter.ts";
+import type { Periods } from "./period-grid.ts";
+import { PeriodGrid } from "./period-grid.ts";
 import { SampleClock } from "./sample-clock.ts";
+import { followsFresh, isSmooth } from "./smoothness.ts";
 import type { Contender } from "./steady.ts";
 import type { Piece, Stretch } from "./stretch.ts";
 import { enterPiece, temperatureAt } from "./stretch.ts";
@@ -21,14 +23,10 @@ import { locate, valueAt } from "./weather-path.ts";
 /** Values a stepper wants as cubics: see `Followed`. */
 export const FOLLOWED = { available: 0, clipped: 1, best: 2, fresh: 3, power: 4, voltage: 5, current: 6 } as const;
 export const FOLLOWED_COUNT = 7;
+/** `perfect` has no period of its own: its energy is summed as finely as this, s. */
+const PERFECT_PERIOD = 1;
 /** Largest error of a followed power, of the maximum power. */
 const POWER = 3e-8;
-
-/** Periods [first, end) of one piece; `weight` of the last one of all, in periods. */
-export interface Periods {
-  first: number;
-  end: number;
-}
 
 /**
  * One rule on its own clock. Each period is evaluated once, at its middle: that power counts for the whole period and
@@ -36,18 +34,17 @@ export interface Periods {
  */
 export class Stepper {
   readonly contender: Contender;
-  readonly period: number;
+  readonly grid: PeriodGrid;
   readonly tally: Tally;
   /** Whether the operating point follows the weather smoothly, so that no period need be stepped one by one. */
   readonly smooth: boolean;
   readonly tolerances: readonly number[];
+  /** A pilot cell stepped period by period: what it holds is always fresh. */
+  private readonly holdsFresh: boolean;
   private readonly array: PhotovoltaicArray;
   private readonly weather: TimedWeather;
   private readonly terminals: Terminals;
   private readonly condition: Condition = emptyCondition();
-  /** The whole of the weather's last period may be cut: index and weight of it. */
-  private readonly lastPeriod: number;
-  private readonly lastWeight: number;
   private readonly limited: boolean;
   /** Neither limits nor ripple: the array's own current at the held voltage. */
   private readonly plain: boolean;
@@ -67,24 +64,16 @@ export class Stepper {
     this.array = array;
     this.weather = weather;
     this.terminals = new Terminals(converter);
-    this.period = rule.behaviour === "perfect" ? Math.min(1, weather.step) : rule.controlPeriod;
-    const duration = weather.step * weather.irradiance.length;
-    const periods = Math.ceil(duration / this.period - 1e-9);
-    this.lastPeriod = periods - 1;
-    this.lastWeight = Math.min(1, duration / this.period - this.lastPeriod);
+    const period = rule.behaviour === "perfect" ? Math.min(PERFECT_PERIOD, weather.step) : rule.controlPeriod;
+    this.grid = new PeriodGrid(period, weather.step * weather.irradiance.length);
     this.limited = Number.isFinite(converter.maximumPower) || Number.isFinite(converter.maximumCurrent);
     this.plain = !this.limited && converter.rippleAmplitude === 0;
     this.smooth = isSmooth(contender);
     const sampling = rule.behaviour === "perfect" ? null : rule.sampling;
     this.clock = sampling === null ? null : new SampleClock(sampling, converter, array, weather);
+    this.holdsFresh = !this.smooth && sampling !== null && sampling.pilot;
     const fresh = followsFresh(contender) ? POWER : 0;
     this.tolerances = [POWER, POWER, POWER, fresh, this.smooth ? POWER : 0, 0, 0];
-  }
-
-  /** Periods whose middle lies in [from, to), s; the last piece of all takes the last period whole. */
-  periodsIn(from: number, to: number, isEnd: boolean): Periods {
-    const end = isEnd ? this.lastPeriod + 1 : periodFrom(to, this.period);
-    return { first: periodFrom(from, this.period), end };
   }
 
   /** Writes what the stepper follows of a condition (see `FOLLOWED`). */
@@ -135,7 +124,7 @@ export class Stepper {
     if (this.smooth) return;
     const { circuit } = this.condition;
     for (let k = periods.first; k < periods.end; k++) {
-      const time = (k + 0.5) * this.period;
+      const time = this.grid.middleOf(k);
       stretch.circuitAt(time, circuit);
       this.condition.cellTemperature = temperatureAt(piece, time);
       this.condition.openCircuitVoltage = Number.NaN;
@@ -154,23 +143,27 @@ export class Stepper {
 
   /** What is smooth along a stretch, summed over its periods without stepping them. */
   private sumSmooth(stretch: Stretch, periods: Periods, base: number): void {
-    const { tally, period } = this;
+    const { tally, grid } = this;
     const count = periods.end - periods.first;
-    const times = { first: (periods.first + 0.5) * period, spacing: period, count };
-    const cut = periods.end === this.lastPeriod + 1 ? 1 - this.lastWeight : 0;
+    const times = { first: grid.middleOf(periods.first), spacing: grid.period, count };
+    const lastMiddle = grid.middleOf(periods.end - 1);
+    const cut = 1 - grid.weightOf(periods.end - 1);
     const sum = (index: number): number => {
       const whole = stretch.sumFollowed(base + index, times);
-      return cut > 0 ? whole - cut * stretch.followedAt(base + index, (this.lastPeriod + 0.5) * period) : whole;
+      return cut > 0 ? whole - cut * stretch.followedAt(base + index, lastMiddle) : whole;
     };
-    for (const q of [0, 1, 2] as const) tally.maximum[q] += stretch.sumMaximum(q, times);
-    tally.sunlit += count;
+    for (const q of [0, 1, 2] as const) {
+      const whole = stretch.sumMaximum(q, times);
+      tally.maximum[q] += cut > 0 ? whole - cut * stretch.maximumAt(q, lastMiddle) : whole;
+    }
+    tally.sunlit += count - cut;
     tally.available += sum(FOLLOWED.available);
     tally.clipped += sum(FOLLOWED.clipped);
     const best = sum(FOLLOWED.best);
     tally.best += best;
     const { rule } = this.contender;
     const fresh = rule.behaviour === "target" ? sum(FOLLOWED.fresh) : best;
-    tally.fresh += fresh;
+    if (!this.holdsFresh) tally.fresh += fresh;
     if (rule.behaviour === "climb") tally.held += best;
     if (!this.smooth) return;
     tally.held += fresh;
@@ -180,7 +173,7 @@ export class Stepper {
     tally.lit += count - cut;
     if (!tally.keepsExtremes) return;
     for (let k = periods.first; k < periods.end; k++) {
-      const time = (k + 0.5) * period;
+      const time = grid.middleOf(k);
       const voltage = stretch.followedAt(base + FOLLOWED.voltage, time);
       stretchExtremes(tally, voltage, stretch.followedAt(base + FOLLOWED.power, time));
     }
@@ -192,22 +185,23 @@ export class Stepper {
     const { rule, converter } = this.contender;
     const values = new Float64Array(FOLLOWED_COUNT);
     for (let k = periods.first; k < periods.end; k++) {
-      const time = (k + 0.5) * this.period;
+      const time = this.grid.middleOf(k);
       enterPiece(condition, this.array, piece, time);
       if (condition.maximum.power <= 0) {
         this.sleep();
         continue;
       }
       this.follow(condition, time, run, values, 0);
-      const weight = this.weightOf(k);
-      tally.maximum[0] += condition.maximum.voltage;
-      tally.maximum[1] += condition.maximum.current;
-      tally.maximum[2] += condition.maximum.power;
-      tally.sunlit += 1;
+      const weight = this.grid.weightOf(k);
+      tally.maximum[0] += weight * condition.maximum.voltage;
+      tally.maximum[1] += weight * condition.maximum.current;
+      tally.maximum[2] += weight * condition.maximum.power;
+      tally.sunlit += weight;
       tally.available += weight * values[FOLLOWED.available];
       tally.clipped += weight * values[FOLLOWED.clipped];
       tally.best += weight * values[FOLLOWED.best];
-      tally.fresh += weight * (rule.behaviour === "climb" ? values[FOLLOWED.best] : values[FOLLOWED.fresh]);
+      if (!this.holdsFresh)
+        tally.fresh += weight * (rule.behaviour === "climb" ? values[FOLLOWED.best] : values[FOLLOWED.fresh]);
       if (rule.behaviour === "climb") tally.held += weight * values[FOLLOWED.best];
       if (this.smooth) {
         tally.held += weight * values[FOLLOWED.fresh];
@@ -218,16 +212,12 @@ export class Stepper {
     }
   }
 
-  private weightOf(period: number): number {
-    return period === this.lastPeriod ? this.lastWeight : 1;
-  }
-
   /** One period in the condition the terminals have entered. */
   private stepPeriod(k: number, run: Run, idle: boolean): void {
     const { rule } = this.contender;
     const { terminals, point, tally } = this;
     if (rule.behaviour === "perfect") return;
-    const weight = this.weightOf(k);
+    const weight = this.grid.weightOf(k);
     if (this.asleep) this.wake(k);
     if (this.clock !== null) this.sample(this.clock, k, run);
     if (rule.behaviour === "climb") {
@@ -236,11 +226,13 @@ export class Stepper {
       this.voltage = climbOn(rule, terminals, this.seen, this.voltage, point);
       return;
     }
-    const target = targetVoltage(rule, terminals, this.reading, this.outsideAt((k + 0.5) * this.period, run));
+    const target = targetVoltage(rule, terminals, this.reading, this.outsideAt(this.grid.middleOf(k), run));
     if (rule.step === 0) this.voltage = target;
     this.operate();
     const plain = rule.step === 0 && this.contender.converter.rippleAmplitude === 0;
-    tally.held += weight * (plain ? point.power : terminals.power(target));
+    const held = plain ? point.power : terminals.power(target);
+    tally.held += weight * held;
+    if (this.holdsFresh) tally.fresh += weight * held;
     this.settle(k, idle, weight);
     if (rule.step > 0) {
       this.voltage = terminals.clamp(this.voltage + (this.voltage < target ? rule.step : -rule.step));
@@ -265,7 +257,7 @@ export class Stepper {
 
   private wake(k: number): void {
     this.asleep = false;
-    this.clock?.wake(k * this.period);
+    this.clock?.wake(k * this.grid.period);
     this.seen = firstSight();
     this.voltage = this.terminals.clamp(conditionVoc(this.condition));
   }
@@ -276,7 +268,7 @@ export class Stepper {
       this.reading = readSample(clock.sampling, this.terminals);
       return;
     }
-    if (!clock.isDue((k + 0.5) * this.period)) return;
+    if (!clock.isDue(this.grid.middleOf(k))) return;
     this.reading = clock.read(run);
     if (this.contender.rule.behaviour !== "climb") return;
     this.voltage = this.terminals.clamp(this.reading);
@@ -286,33 +278,7 @@ export class Stepper {
   /** Share of period `k` that samples take, of the part of it that counts. */
   private interruptedShare(k: number, weight: number): number {
     if (this.clock === null || this.clock.sampling.pilot) return 0;
-    return this.clock.interruptedShare(k * this.period, (k + weight) * this.period);
+    const { period } = this.grid;
+    return this.clock.interruptedShare(k * period, (k + weight) * period);
   }
-}
-
-/** Whether the operating point follows the weather smoothly: no steps, no held samples, no sleep, no rounded reading. */
-function isSmooth({ rule, converter }: Contender): boolean {
-  if (rule.behaviour === "perfect") return true;
-  if (rule.behaviour === "climb" || rule.step > 0 || converter.wakePower > 0) return false;
-  if (rule.sampling === null) return true;
-  return rule.sampling.pilot && isUnrounded(converter);
-}
-
-/**
- * Whether the power at the fresh target is smooth enough to be checked. Where readings are rounded or come from a sweep
- * it moves in small stairs: the cubics then run through their middle, which touches only how the loss splits between
- * set point and held sample, by less than one stair.
- */
-function followsFresh({ rule, converter }: Contender): boolean {
-  if (rule.behaviour !== "target") return false;
-  return rule.sampling === null || (rule.sampling.reads !== "best-swept-voltage" && isUnrounded(converter));
-}
-
-function isUnrounded({ voltageSensor, currentSensor }: Converter): boolean {
-  return voltageSensor.resolution === 0 && currentSensor.resolution === 0;
-}
-
-/** The first period whose middle is at or after `time`, s. */
-function periodFrom(time: number, period: number): number {
-  return Math.ceil(time / period - 0.5 - 1e-9);
 }

@@ -131,6 +131,11 @@ export class Stretch {
     return sumCubic(this.coefficients, 4 * (MAXIMUM + index), this.shares(times));
   }
 
+  /** Voltage, current or power of the maximum power point at a time (s). */
+  maximumAt(index: 0 | 1 | 2, time: number): number {
+    return cubicAt(this.coefficients, 4 * (MAXIMUM + index), (time - this.from) / this.length);
+  }
+
   private shares({ first, spacing, count }: Times): Times {
     return { first: (first - this.from) / this.length, spacing: spacing / this.length, count };
   }
