@@ -25,12 +25,13 @@ function bestSwept(points: number, terminals: Terminals): number {
   const high = Math.max(low, Math.min(trackingMaximumVoltage, conditionVoc(terminals.condition)));
   const point = { voltage: 0, current: 0, power: 0 };
   let best = low;
-  let bestPower = Number.NEGATIVE_INFINITY;
+  let bestPower = 0;
   for (let k = 0; k < points; k++) {
     const voltage = low + ((high - low) * k) / (points - 1);
     terminals.operate(voltage, point);
     const power = readPower(terminals, point);
-    if (power > bestPower) {
+    // On a plateau, equal but for rounding, the first voltage stands.
+    if (k === 0 || power - bestPower > 1e-12 * Math.abs(bestPower)) {
       best = voltage;
       bestPower = power;
     }
