@@ -43,6 +43,9 @@ const POINTERS: Record<string, string> = {
   windSpeed: "/climate/temperature/windSpeed",
 };
 
+/** What a climate with missing samples may say of them. */
+const GAP_CHOICES = 'a number, or gaps "skip" or {"interpolateUpTo": seconds} in the climate';
+
 /** Prepares a series for the studies and looks it over for mistakes. @throws StudyError for what cannot be used */
 export function prepareForStudy(series: ClimateSeries): StudyClimate {
   const samples = sampleCount(series);
@@ -71,6 +74,7 @@ function refusingAsStudy<T>(work: () => T): T {
   } catch (error) {
     if (!(error instanceof ClimateError)) throw error;
     const pointer = POINTERS[error.column] ?? "/climate";
-    throw new StudyError(error.code, error.index >= 0 ? `${pointer}/${error.index}` : pointer, error.message);
+    const expected = error.code === "missing-samples" ? GAP_CHOICES : undefined;
+    throw new StudyError(error.code, error.index >= 0 ? `${pointer}/${error.index}` : pointer, error.message, expected);
   }
 }

@@ -89,7 +89,7 @@ function placeOf(
 ): RulePlace {
   const ruleArray = { modulesInSeries: request.array.modulesInSeries, standard: array.standard };
   const settings = completeSettings(rule, ruleArray);
-  checkRule(rule.kind, settings, 1, `/rules/${index}`);
+  checkRule(rule.kind, settings, null, `/rules/${index}`);
   const ledger = openLedger(1, 1, { operating: true, causes: false });
   const contender = {
     rule: prepareRule(rule.kind, settings, ruleArray),

@@ -112,6 +112,6 @@ function noSuchSlope(test: SequenceName): StudyError {
     "unknown-slope",
     "/traceSlope",
     `${test} has no such row; its slopes are ${slopes} W/m2/s.`,
-    slopes,
+    `one of: ${slopes}`,
   );
 }

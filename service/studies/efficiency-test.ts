@@ -52,10 +52,7 @@ export function testEfficiency(request: EfficiencyTestRequest): EfficiencyTestRe
   const array = photovoltaicArray(built.module, { modulesInSeries: 1, stringsInParallel: 1, wiringResistance: 0 });
   const ruleArray = { modulesInSeries: 1, standard: array.standard };
   const settings = completeSettings(request.rule, ruleArray);
-  checkRule(request.rule.kind, settings, 1, "/rule");
-  if (Object.values(settings).some((value) => value instanceof Float64Array)) {
-    throw new StudyError("column-without-climate", "/rule", "The test has no climate: give a single number.");
-  }
+  checkRule(request.rule.kind, settings, null, "/rule");
   const bench: EfficiencyBench = {
     array,
     rule: prepareRule(request.rule.kind, settings, ruleArray),

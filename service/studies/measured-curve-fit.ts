@@ -1,7 +1,7 @@
-import { levenbergMarquardt } from "ml-levenberg-marquardt";
 import type { Circuit } from "../core/diode/circuit.ts";
 import { circuitOf } from "../core/diode/circuit.ts";
 import { currentAt } from "../core/diode/current.ts";
+import { searchLeastSquares } from "./least-squares.ts";
 
 /** Measured points of one I-V curve, V and A, each of shape [n]. */
 export interface MeasuredCurve {
@@ -27,7 +27,8 @@ const RESISTANCE = [0, 0.02, 0.05, 0.1];
  * 11 (1963) 431-441) with the exact derivatives of the implicit equation.
  *
  * Starts: for given a and Rs the equation with the measured currents is linear in IL, I0 and 1/Rsh; the best of a grid
- * of 24 is taken. Null when no start is usable (fewer than 5 points, no light current, no open circuit in reach).
+ * of 24 is taken. Null when no start is usable (fewer than 5 points, no light current, no open circuit in reach) or the
+ * points say nothing of some parameter.
  */
 export function measuredCurveFit(curve: MeasuredCurve): MeasuredFit | null {
   const scale = scaleOf(curve);
@@ -37,7 +38,7 @@ export function measuredCurveFit(curve: MeasuredCurve): MeasuredFit | null {
   let scaled = start;
   let error = Number.POSITIVE_INFINITY;
   for (let round = 0; round < ROUNDS; round++) {
-    const found = levenbergMarquardt(data, (values) => modelOf(circuitFrom(values, scale), scale), {
+    const found = searchLeastSquares(data, (values) => modelOf(circuitFrom(values, scale), scale), {
       initialValues: scaled,
       jacobianFunction: (values) => derivativesOf(circuitFrom(values, scale), scale),
       minValues: [0.1, -40, 0, 0, 0.05],
@@ -46,10 +47,12 @@ export function measuredCurveFit(curve: MeasuredCurve): MeasuredFit | null {
       maxIterations: ITERATIONS,
       errorTolerance: 1e-30,
     });
+    if (found === null) break;
     const gain = error - found.parameterError;
     [scaled, error] = [found.parameterValues, found.parameterError];
     if (gain <= 1e-13 * error) break;
   }
+  if (!Number.isFinite(error)) return null;
   const circuit = circuitFrom(scaled, scale);
   return { circuit, rootMeanSquareError: rootMeanSquareError(curve, circuit) };
 }

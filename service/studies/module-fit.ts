@@ -65,11 +65,12 @@ function fitDatasheet(module: Extract<ModuleChoice, { kind: "datasheet" }>): Mod
 
 function fitMeasured(module: MeasuredModule): ModuleFitResult {
   const found = measuredCurveFit(module);
-  if (found === null) {
-    throw new StudyError(
-      "curve-not-fitted",
-      "/module",
-      "No circuit could be started from these points; give at least 5, from near short circuit to near open circuit, with positive currents below the open-circuit voltage.",
+  if (found === null) throw notFitted("No circuit follows these points.");
+  const highest = module.current.reduce((most, value) => Math.max(most, value), 0);
+  const share = found.rootMeanSquareError / highest;
+  if (!(share <= WORST_ERROR)) {
+    throw notFitted(
+      `The nearest circuit misses these points by ${found.rootMeanSquareError.toPrecision(3)} A root mean square, ${(100 * share).toFixed(1)} % of the highest current.`,
     );
   }
   const parameters = toStandard(found.circuit, module);
@@ -82,6 +83,18 @@ function fitMeasured(module: MeasuredModule): ModuleFitResult {
     rootMeanSquareError: found.rootMeanSquareError,
     standard: standardOf(parameters),
   };
+}
+
+/** Root mean square error over the highest current, above which a circuit no longer stands for its points: own choice. */
+const WORST_ERROR = 0.05;
+
+function notFitted(finding: string): StudyError {
+  return new StudyError(
+    "curve-not-fitted",
+    "/module",
+    `${finding} Look for outliers, for voltage and current swapped, and for points out of pairs; a sound curve falls from near short circuit to near open circuit.`,
+    `points within ${100 * WORST_ERROR} % of one circuit`,
+  );
 }
 
 /** The translation to irradiance and temperature undone: the parameters at standard test conditions. */

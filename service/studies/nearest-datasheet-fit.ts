@@ -1,7 +1,7 @@
-import { levenbergMarquardt } from "ml-levenberg-marquardt";
 import type { Datasheet, Misfits } from "../core/module/datasheet.ts";
 import { datasheetMisfits } from "../core/module/datasheet.ts";
 import type { SingleDiodeParameters } from "../core/module/single-diode.ts";
+import { searchLeastSquares } from "./least-squares.ts";
 
 /** A circuit and how far it is from each of the datasheet's conditions. */
 export interface DatasheetFit {
@@ -75,6 +75,7 @@ function searchFace(of: Datasheet, face: (typeof FACES)[number], sharpness: numb
   let error = Number.POSITIVE_INFINITY;
   for (let round = 0; round < ROUNDS; round++) {
     const found = improve(residuals, best);
+    if (found === null) break;
     const gain = error - found.parameterError;
     [best, error] = [found.parameterValues, found.parameterError];
     if (gain <= 1e-12 * error) break;
@@ -83,7 +84,7 @@ function searchFace(of: Datasheet, face: (typeof FACES)[number], sharpness: numb
 }
 
 function improve(residuals: (scaled: number[]) => number[], from: number[]) {
-  return levenbergMarquardt(
+  return searchLeastSquares(
     { x: [0, 1, 2, 3, 4], y: [0, 0, 0, 0, 0] },
     (scaled) => {
       const misfits = residuals(scaled);

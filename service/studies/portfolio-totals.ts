@@ -72,6 +72,18 @@ export class PortfolioTotals {
     this.refused++;
   }
 
+  /** Rows that the summary will have: one a label, and one a label in each group. */
+  get rows(): number {
+    let rows = this.whole.size;
+    for (const labels of this.groups.values()) rows += labels.size;
+    return rows;
+  }
+
+  /** Sites so far. */
+  get counts(): { answered: number; refused: number } {
+    return { answered: this.answered, refused: this.refused };
+  }
+
   private keepWorst({ id, count, baseline, candidates }: SiteOutcome): void {
     const held = candidates.find(({ label }) => label === baseline)!;
     const lostFraction = held.available > 0 ? held.lost / held.available : null;

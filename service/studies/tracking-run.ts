@@ -32,6 +32,8 @@ export interface TrackingRequest {
   module: ModuleChoice;
   array: Layout;
   climate: ClimateSeries;
+  /** The same climate prepared beforehand, where many sites share it; left out: it is prepared here. */
+  prepared?: StudyClimate | undefined;
   mode: Mode;
 }
 
@@ -73,7 +75,7 @@ export interface RunTraces extends TraceChoice {
 export function runTracking(request: TrackingRequest, candidates: Candidate[], traces: RunTraces): TrackingRun {
   const built = buildModule(request.module);
   const array = photovoltaicArray(built.module, request.array);
-  const climate = prepareForStudy(request.climate);
+  const climate = request.prepared ?? prepareForStudy(request.climate);
   const { coverage, insolation } = climate;
   const { samples } = coverage;
   const { months, monthOf } = calendarOf(
@@ -85,7 +87,7 @@ export function runTracking(request: TrackingRequest, candidates: Candidate[], t
   const ruleArray = { modulesInSeries: request.array.modulesInSeries, standard: array.standard };
   const contenders = candidates.map((candidate) => {
     const settings = completeSettings(candidate.rule, ruleArray);
-    checkRule(candidate.rule.kind, settings, samples, candidate.pointer);
+    checkRule(candidate.rule.kind, settings, { samples, skipped: climate.skipped }, candidate.pointer);
     return {
       settings,
       rule: prepareRule(candidate.rule.kind, settings, ruleArray),

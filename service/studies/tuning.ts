@@ -1,11 +1,13 @@
 import { photovoltaicArray } from "../core/array/array.ts";
 import type { RuleChoice } from "../core/rules/index.ts";
-import { completeSettings, ruleDefinition } from "../core/rules/index.ts";
+import { completeSettings } from "../core/rules/index.ts";
 import type { ConverterChoice } from "./converter-choice.ts";
 import { buildModule } from "./module-choice.ts";
 import { StudyError } from "./study-error.ts";
 import type { TrackingRequest } from "./tracking-run.ts";
 import { runTracking } from "./tracking-run.ts";
+import type { Tuned } from "./tuning-range.ts";
+import { tunedDeclaration, tuningRange } from "./tuning-range.ts";
 import type { TuningScale } from "./tuning-scale.ts";
 import { scaleBetween } from "./tuning-scale.ts";
 
@@ -18,12 +20,8 @@ export interface TuningSite extends TrackingRequest {
 }
 
 /** Which numeric setting of a rule is sought, over one site or many. */
-export interface TuningRequest {
+export interface TuningRequest extends Tuned {
   sites: TuningSite[];
-  rule: RuleChoice;
-  parameter: string;
-  /** Null: around what is usual. */
-  range: { from: number; to: number } | null;
   /** Points of the loss curve, 41 or more. */
   points: number;
 }
@@ -62,6 +60,8 @@ const FLAT = 1e-3;
 /** Values tried in one pass when closing in, and passes: each shortens the bracket fivefold. */
 const REFINED = 9;
 const ROUNDS = 7;
+/** Values tried beyond the curve: the closing in, and the setting today or the common one. */
+export const TRIED_BESIDES = REFINED * ROUNDS + 2;
 const NO_TRACES = { maximum: false, operating: false, causes: false };
 
 /**
@@ -69,8 +69,9 @@ const NO_TRACES = { maximum: false, operating: false, causes: false };
  * its lowest point closed in, 9 values a pass over the weather, to below 1e-5 of the range. @throws StudyError
  */
 export function tune(request: TuningRequest): TuningResult {
-  const { parameter, unit, today } = tunedParameter(request);
-  const scale = scaleBetween(rangeOf(request, today));
+  const { parameter } = request;
+  const { unit, today } = settingToday(request);
+  const scale = scaleBetween(tuningRange(request, today)!);
   const sites = request.sites.map((site) => new SiteLosses(site, request.rule, parameter));
   const available = sites.map((site) => site.available);
   const whole = (values: number[]): Float64Array => sum(sites.map((site) => site.lostAt(values)));
@@ -102,12 +103,6 @@ export function tune(request: TuningRequest): TuningResult {
   };
 }
 
-/** Candidates that a site's tuning tracks, for foreseeing its work: the curve and the closing in, its own besides. */
-export function tuningCandidates(points: number, sites: number): number {
-  const once = points + REFINED * ROUNDS + 2;
-  return sites > 1 ? 2 * once : once;
-}
-
 /** The losses of one site at values of the setting. */
 class SiteLosses {
   readonly site: TuningSite;
@@ -137,8 +132,8 @@ class SiteLosses {
   }
 }
 
-/** Does a site's work; what physics refuses is pointed at where the site's own members stand. */
-function atSite<T>({ pointers }: TuningSite, work: () => T): T {
+/** Does a site's work; what physics refuses is pointed at where the site's own members stand, or said with its id. */
+function atSite<T>({ id, pointers }: TuningSite, work: () => T): T {
   try {
     return work();
   } catch (error) {
@@ -146,7 +141,9 @@ function atSite<T>({ pointers }: TuningSite, work: () => T): T {
     const pointer = error.pointer
       .replace(/^\/module(?=\/|$)/, pointers.module)
       .replace(/^\/climate(?=\/|$)/, pointers.climate);
-    throw new StudyError(error.code, pointer, error.message, error.expected);
+    const isOwn = pointer.startsWith("/sites/") || !pointers.climate.startsWith("/sites/");
+    const detail = isOwn ? error.message : `At site "${id}": ${error.message}`;
+    throw new StudyError(error.code, pointer, detail, error.expected);
   }
 }
 
@@ -221,38 +218,11 @@ function withSetting(rule: RuleChoice, parameter: string, value: number): RuleCh
   return { kind: rule.kind, settings: { ...rule.settings, [parameter]: value } };
 }
 
-/** The setting's unit and its value today. @throws StudyError for one that is not a number of the rule */
-function tunedParameter({ sites, rule, parameter }: TuningRequest) {
-  const { parameters } = ruleDefinition(rule.kind);
-  const declared = parameters[parameter];
-  if (declared?.type !== "number" || declared.integer) {
-    const numbers = Object.keys(parameters).filter((name) => parameters[name].type === "number");
-    const detail =
-      numbers.length === 0
-        ? `${rule.kind} has no numeric setting to tune.`
-        : `${parameter} is no numeric setting of ${rule.kind}; tune one of: ${numbers.join(", ")}.`;
-    throw new StudyError("not-tunable", "/parameter", detail);
-  }
-  const [site] = sites;
+/** The setting's unit and its value at the first site. @throws StudyError for one that cannot be tuned */
+function settingToday(request: TuningRequest): { unit: string; today: number } {
+  const { unit } = tunedDeclaration(request);
+  const [site] = request.sites;
   const array = atSite(site, () => photovoltaicArray(buildModule(site.module).module, site.array));
   const ruleArray = { modulesInSeries: site.array.modulesInSeries, standard: array.standard };
-  return { parameter, unit: declared.unit, today: completeSettings(rule, ruleArray)[parameter] as number };
-}
-
-/** The range asked for, or the usual one half as wide again on either side, inside what the setting allows. */
-function rangeOf({ rule, parameter, range }: TuningRequest, today: number): { from: number; to: number } {
-  const declared = ruleDefinition(rule.kind).parameters[parameter];
-  if (declared.type !== "number") throw new StudyError("not-tunable", "/parameter", "Not a number.");
-  const least = declared.minimum ?? declared.exclusiveMinimum ?? 0;
-  const [low, high] = declared.usual ?? [0.7 * today, 1.2 * today];
-  const margin = (high - low) / 2;
-  const from = range?.from ?? Math.max(least > 0 ? least : 0.1 * low, low - margin);
-  const to = range?.to ?? Math.min(declared.maximum, high + margin);
-  if (from < to && from >= least && to <= declared.maximum) return { from, to };
-  throw new StudyError(
-    "range-outside-setting",
-    "/range",
-    `The range ${from} to ${to} must rise and lie within ${least} to ${declared.maximum} ${declared.unit}.`,
-    `${least} to ${declared.maximum}`,
-  );
+  return { unit, today: completeSettings(request.rule, ruleArray)[request.parameter] as number };
 }

@@ -40,8 +40,8 @@ function litSamples(irradiance: Float64Array): number {
   return lit;
 }
 
-/** A setting as given, or its fixed default. */
-function setting(rule: RuleChoice, name: string): number {
+/** A setting as given, or its fixed default; 0 where the rule has none or derives it. */
+export function setting(rule: RuleChoice, name: string): number {
   const given = rule.settings[name];
   if (typeof given === "number") return given;
   const parameter = ruleDefinition(rule.kind).parameters[name];

@@ -49,6 +49,82 @@ export function comparisonRequest(samples = 24): Json {
   });
 }
 
+/** The least that a datasheet fit needs, new at each call. */
+export function moduleFitRequest(): Json {
+  return structuredClone({ module: MODULE });
+}
+
+/** Six points of an invented lit cell, from beyond short circuit to near open circuit; new at each call. */
+export function measuredFitRequest(): Json {
+  return structuredClone({
+    module: {
+      kind: "measured-curve",
+      cellsInSeries: 1,
+      irradiance: 1000,
+      cellTemperature: 33,
+      voltage: [-0.2, 0, 0.2, 0.4, 0.5, 0.57],
+      current: [0.764, 0.76, 0.757, 0.72, 0.55, 0.01],
+    },
+  });
+}
+
+/** The least that a curve with two rules on it needs, new at each call. */
+export function curveRequest(): Json {
+  const rules = [{ kind: "constant-voltage" }, { kind: "short-current-pulse" }];
+  return structuredClone({ module: MODULE, irradiance: 800, cellTemperature: 45, rules, points: 5 });
+}
+
+/** The standard's test generator of crystalline silicon: 1000 W at 100 V nominally. */
+export const GENERATOR = {
+  kind: "test-generator",
+  technology: "crystalline-silicon",
+  maximumPower: 1000,
+  maximumPowerVoltage: 100,
+};
+
+/** The least that a static efficiency test needs, new at each call. */
+export function efficiencyTestRequest(): Json {
+  return structuredClone({ module: GENERATOR, rule: { kind: "constant-voltage" }, test: "static" });
+}
+
+/** The least that a tuning of one site needs, new at each call. */
+export function tuningRequest(samples = 24): Json {
+  return structuredClone({
+    module: MODULE,
+    climate: climateOf(samples),
+    rule: { kind: "fractional-open-circuit-voltage" },
+    parameter: "fraction",
+  });
+}
+
+/** A tuning of two sites that share the module, new at each call. */
+export function sitesRequest(samples = 24): Json {
+  const { climate, ...shared } = tuningRequest(samples);
+  return {
+    ...shared,
+    sites: [
+      { id: "Heron Bank", climate },
+      { id: "Mud Flats", climate: climateOf(samples) },
+    ],
+  };
+}
+
+/** A climate of `samples` hours in horizontal components at an invented landing stage, from a morning on. */
+export function horizontalClimate(samples: number): Json {
+  const global = Array.from({ length: samples }, (_, k) => Math.max(0, 700 * Math.sin(((k % 24) / 12) * Math.PI)));
+  return {
+    start: "2025-06-01T06:00:00+00:00",
+    step: 3600,
+    irradiance: {
+      kind: "horizontal",
+      global,
+      diffuse: global.map((value) => value / 3),
+      site: { latitude: 51, longitude: 0, tilt: 30, azimuth: 180 },
+    },
+    temperature: { kind: "ambient", values: global.map(() => 15) },
+  };
+}
+
 /** A request as body. */
 export function bodyOf(request: unknown): Uint8Array {
   return new TextEncoder().encode(typeof request === "string" ? request : JSON.stringify(request));

@@ -1,3 +1,4 @@
+import type { OperationName } from "../../service/wire/operations.ts";
 import type { Json } from "./requests.ts";
 import { climateOf, estimateRequest } from "./requests.ts";
 
@@ -12,13 +13,18 @@ export interface WrongRequest {
   at?: string;
 }
 
-const wrong = (what: string, set: Record<string, Json>, code: string, says: RegExp, at?: string): WrongRequest => ({
-  what,
-  set,
-  code,
-  says,
-  ...(at === undefined ? {} : { at }),
-});
+/** Wrong requests that start from one sound request. */
+export interface WrongGroup {
+  operation: OperationName;
+  of: string;
+  sound: () => Json;
+  wrongs: WrongRequest[];
+}
+
+/** A request bent in one way. */
+export function wrong(what: string, set: Record<string, Json>, code: string, says: RegExp, at?: string): WrongRequest {
+  return { what, set, code, says, ...(at === undefined ? {} : { at }) };
+}
 
 /** `request` with the members of a wrong one set. */
 export function bent(request: Json, { set }: WrongRequest): Json {

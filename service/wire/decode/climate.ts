@@ -94,7 +94,7 @@ function checkLengths(climate: RawClimate, limits: Limits): Flaw[] {
     .map(([pointer, values]) => ({
       pointer,
       code: "unequal-columns",
-      detail: `This column has ${values.length} values, ${name} has ${samples}; give every column one value a sample.`,
+      detail: `This column has ${values.length} value${values.length === 1 ? "" : "s"}, ${name} has ${samples}; give every column one value a sample.`,
       expected: `${samples} values`,
     }));
 }

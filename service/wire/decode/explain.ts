@@ -1,11 +1,15 @@
 import type { z } from "@hono/zod-openapi";
 import type { Flaw } from "../problem.ts";
+import { SHOWN_FLAWS } from "../problem.ts";
 import type { ColumnFinding } from "../schema/column.ts";
 import { unitOf } from "../schema/quantity.ts";
+import { expectedBy, rangeOf } from "./expected.ts";
+import { columnFlaw } from "./explain-column.ts";
 import { rangeHint } from "./hints.ts";
 import { nearestName } from "./nearest-name.ts";
 import type { Path } from "./schema-at.ts";
-import { kindsOf, membersAt, pointerOf, schemaAt, valueAt } from "./schema-at.ts";
+import { alternativesAt, kindsOf, kindsWith, membersAt, pointerOf, schemaAt, valueAt } from "./schema-at.ts";
+import { shown, typeDetail, withArticle } from "./words.ts";
 
 type Issue = z.core.$ZodIssue;
 
@@ -15,25 +19,35 @@ interface Refusal {
   root: unknown;
 }
 
-/** The flaws behind a schema's issues, each saying what would be right. */
-export function explain(issues: readonly Issue[], schema: z.ZodType, root: unknown): Flaw[] {
-  return issues.flatMap((issue) => explainOne(issue, { schema, root }));
+/** The first flaws behind a schema's issues, each saying what would be right, and how many there are in all. */
+export function explain(issues: readonly Issue[], schema: z.ZodType, root: unknown): { flaws: Flaw[]; count: number } {
+  const flaws: Flaw[] = [];
+  let count = 0;
+  for (const issue of issues) {
+    const explained = flaws.length < SHOWN_FLAWS ? explainOne(issue, { schema, root }) : [];
+    flaws.push(...explained);
+    count += issue.code === "unrecognized_keys" ? issue.keys.length : Math.max(1, explained.length);
+  }
+  return { flaws, count };
 }
 
 function explainOne(issue: Issue, refusal: Refusal): Flaw[] {
   const { path } = issue;
   const pointer = pointerOf(path);
   const value = valueAt(refusal.root, path);
-  if (issue.code === "unrecognized_keys") return issue.keys.map((key) => unknownMember(key, path, refusal));
+  if (issue.code === "unrecognized_keys") {
+    return issue.keys.slice(0, SHOWN_FLAWS).map((key) => unknownMember(key, path, refusal));
+  }
   if (value === undefined) return [missing(path, refusal)];
   switch (issue.code) {
     case "custom":
-      return [columnFlaw(path, issue.params as unknown as ColumnFinding, refusal)];
+      return [columnFlaw(path, issue.params as unknown as ColumnFinding, refusal.root)];
     case "invalid_type":
-      return [wrongType(pointer, issue.expected, value)];
+      return [wrongType(path, issue.expected, value)];
     case "too_small":
     case "too_big":
-      return issue.origin === "array" ? [wrongCount(issue, pointer, value)] : [outOfRange(path, refusal)];
+      if (issue.origin === "array") return [wrongCount(issue, path, value)];
+      return [issue.origin === "string" ? wrongFormat(pointer, path, String(value)) : outOfRange(path, refusal)];
     case "invalid_value":
       return [notOneOf(pointer, value, issue.values.map(String))];
     case "invalid_union":
@@ -46,26 +60,31 @@ function explainOne(issue: Issue, refusal: Refusal): Flaw[] {
   }
 }
 
-/** A number or a column: an array is told what is wrong with it as a column, anything else as a number. */
+/** Alternatives that no member tells apart: what is wrong is said of the one whose type the value has, else of none. */
 function explainUnion(errors: readonly (readonly Issue[])[], path: Path, refusal: Refusal): Flaw[] {
-  const issues = Array.isArray(valueAt(refusal.root, path)) ? errors[1] : errors[0];
-  return issues.flatMap((issue) => explainOne({ ...issue, path: [...path, ...issue.path] } as Issue, refusal));
+  const meant = errors.findIndex((issues) => !issues.some(isOfAnotherType));
+  const flaws = errors[Math.max(0, meant)].flatMap((issue) =>
+    explainOne({ ...issue, path: [...path, ...issue.path] } as Issue, refusal),
+  );
+  if (meant >= 0) return flaws;
+  const expected = alternativesAt(refusal.schema, path, refusal.root).map(expectedBy).join("; or ");
+  return flaws.map((flaw) => ({ ...flaw, expected }));
 }
 
-/** A value as one would quote it, shortened. */
-function shown(value: unknown): string {
-  const text = JSON.stringify(value) ?? "nothing";
-  return text.length > 40 ? `${text.slice(0, 40)}...` : text;
+/** Whether an issue says that the whole value is none of what an alternative takes. */
+function isOfAnotherType(issue: Issue): boolean {
+  if (issue.path.length > 0) return false;
+  if (issue.code === "custom") return issue.params?.["finding"] === "not-an-array";
+  return issue.code === "invalid_type" || issue.code === "invalid_value";
 }
 
 function unknownMember(key: string, path: Path, { schema, root }: Refusal): Flaw {
   const known = membersAt(schema, path, root);
+  const others = kindsWith(key, schema, path, root);
   const meant = nearestName(key, known);
-  const name = shown(key);
-  const detail =
-    meant === undefined
-      ? `There is no member ${name} here.`
-      : `There is no member ${name} here; did you mean "${meant}"?`;
+  const question = meant === undefined ? "." : `; did you mean "${meant}"?`;
+  const hint = others.length > 0 ? `; it belongs to kind ${others.join(", ")}.` : question;
+  const detail = `There is no member ${shown(key)} here${hint}`;
   return {
     pointer: pointerOf([...path, key]),
     code: "unknown-member",
@@ -77,69 +96,52 @@ function unknownMember(key: string, path: Path, { schema, root }: Refusal): Flaw
 function missing(path: Path, { schema, root }: Refusal): Flaw {
   const name = String(path.at(-1) ?? "The body");
   const kinds = name === "kind" ? kindsOf(schemaAt(schema, path.slice(0, -1), root)) : [];
-  const unit = unitOf(schemaAt(schema, path, root) ?? {});
-  const expected =
-    kinds.length > 0
-      ? { expected: `one of: ${kinds.join(", ")}` }
-      : unit === undefined
-        ? {}
-        : { expected: `a number in ${unit}` };
-  return { pointer: pointerOf(path), code: "missing", detail: `${name} is required.`, ...expected };
+  const alternatives = alternativesAt(schema, path, root);
+  const at = schemaAt(schema, path, root);
+  const wanted = alternatives.length > 0 ? alternatives : at === undefined ? [] : [at];
+  const expected = kinds.length > 0 ? `one of: ${kinds.join(", ")}` : wanted.map(expectedBy).join("; or ");
+  return { pointer: pointerOf(path), code: "missing", detail: `${name} is required; add it.`, expected };
 }
 
-function wrongType(pointer: string, wanted: string, value: unknown): Flaw {
-  const expected = /^[aeiou]/.test(wanted) ? `an ${wanted}` : `a ${wanted}`;
-  return {
-    pointer,
-    code: "wrong-type",
-    detail: typeDetail(wanted, value),
-    expected: wanted === "int" ? "a whole number" : expected,
-  };
-}
-
-function typeDetail(wanted: string, value: unknown): string {
-  const numeric = wanted === "number" || wanted === "int";
-  if (numeric && typeof value === "number") {
-    return Number.isFinite(value) ? `${value} is not a whole number.` : "The number is too large to be one.";
-  }
-  if (numeric && typeof value === "string") {
-    const plain = value.trim().replace(/^([-+]?\d+),(\d+)$/, "$1.$2");
-    const number = plain === "" ? Number.NaN : Number(plain);
-    if (Number.isFinite(number)) return `${shown(value)} is a string; write ${number}, without quotes.`;
-  }
-  if (value === null) return "null will not do here; leave the member out for its default, if it has one.";
-  return `${shown(value)} is ${Array.isArray(value) ? "an array" : `a ${typeof value}`}.`;
+function wrongType(path: Path, wanted: string, value: unknown): Flaw {
+  const expected = wanted === "int" ? "a whole number" : withArticle(wanted);
+  return { pointer: pointerOf(path), code: "wrong-type", detail: typeDetail(wanted, value, path), expected };
 }
 
 function wrongCount(
   issue: { code: string; minimum?: number | bigint; maximum?: number | bigint },
-  pointer: string,
+  path: Path,
   value: unknown,
 ): Flaw {
   const count = (value as unknown[]).length;
-  const bound = issue.code === "too_small" ? `at least ${issue.minimum}` : `at most ${issue.maximum}`;
-  const code = issue.code === "too_small" ? "too-few" : "too-many";
-  return { pointer, code, detail: `There are ${count}; ${bound} will do.`, expected: `${bound} elements` };
+  const [code, bound, verb] =
+    issue.code === "too_small"
+      ? ["too-few", `at least ${issue.minimum}`, "needed"]
+      : ["too-many", `at most ${issue.maximum}`, "admitted"];
+  const isOne = bound === "at least 1";
+  const number = count === 0 ? "none" : count;
+  const detail = `There are ${number} in ${String(path.at(-1))}; ${bound} ${isOne ? "is" : "are"} ${verb}.`;
+  return { pointer: pointerOf(path), code, detail, expected: `${bound} of them` };
 }
 
 function outOfRange(path: Path, { schema, root }: Refusal): Flaw {
   const value = valueAt(root, path);
   const at = schemaAt(schema, path, root) as z.ZodNumber;
-  const unit = unitOf(at) ?? "1";
-  const expected = `${rangeOf(at)}${unit === "1" ? "" : ` ${unit}`}`;
-  const hint = rangeHint({ value, path, root, unit, maximum: at.maxValue ?? Number.POSITIVE_INFINITY });
+  const expected = rangeOf(at);
+  const hint = rangeHint({
+    value,
+    path,
+    root,
+    unit: unitOf(at) ?? "1",
+    minimum: at.minValue ?? Number.NEGATIVE_INFINITY,
+    maximum: at.maxValue ?? Number.POSITIVE_INFINITY,
+  });
   return {
     pointer: pointerOf(path),
     code: "out-of-range",
     detail: `${value} is out of range (${expected}).${hint}`,
     expected,
   };
-}
-
-function rangeOf(schema: z.ZodNumber): string {
-  const { exclusiveMinimum } = schema._zod.bag as { exclusiveMinimum?: number };
-  const low = exclusiveMinimum === undefined ? `${schema.minValue} to` : `above ${exclusiveMinimum}, up to`;
-  return `${low} ${schema.maxValue}`;
 }
 
 function notOneOf(pointer: string, value: unknown, choices: readonly string[]): Flaw {
@@ -150,6 +152,10 @@ function notOneOf(pointer: string, value: unknown, choices: readonly string[]): 
 }
 
 const FORMATS: Record<string, { expected: string; detail: (value: string) => string }> = {
+  parameter: {
+    expected: "the name of a numeric setting of the rule",
+    detail: (value) => `${shown(value)} names no setting; the rule's settings are listed at GET /v1/rules.`,
+  },
   start: {
     expected: "ISO 8601 with offset from UTC, of 1950 to 2099, such as 2025-01-01T00:00:00+01:00",
     detail: (value) =>
@@ -168,54 +174,10 @@ function wrongFormat(pointer: string, path: Path, value: string): Flaw {
   if (format !== undefined)
     return { pointer, code: "wrong-format", detail: format.detail(value), expected: format.expected };
   const expected = "1 to 100 characters, none of them a control character";
-  return { pointer, code: "wrong-format", detail: `${shown(value)} will not do as a label.`, expected };
-}
-
-function columnFlaw(path: Path, finding: ColumnFinding, { root }: Refusal): Flaw {
-  const { unit, minimum, maximum, wrong } = finding;
-  const value = valueAt(root, path);
-  const pointer = pointerOf(path);
-  const range = `${minimum} to ${maximum} ${unit}`;
-  const more = wrong > 1 ? ` So are ${wrong - 1} more of this column.` : "";
-  switch (finding.finding) {
-    case "not-an-array":
-      return {
-        pointer,
-        code: "wrong-type",
-        detail: `${shown(value)} is not a column.`,
-        expected: "an array of numbers, null for a missing sample",
-      };
-    case "empty":
-      return {
-        pointer,
-        code: "too-few",
-        detail: "The column is empty; a climate has at least one sample.",
-        expected: `${range}, one value a sample`,
-      };
-    case "too-many":
-      return {
-        pointer,
-        code: "too-many",
-        detail: `The column has ${(value as unknown[]).length} values.`,
-        expected: "at most 600000 samples",
-      };
-    case "not-a-number":
-      return {
-        pointer,
-        code: "wrong-type",
-        detail: `${typeDetail("number", value)}${more}`,
-        expected: "a number, or null for a missing sample",
-      };
-    case "out-of-range": {
-      if (!Number.isFinite(value))
-        return { pointer, code: "wrong-type", detail: typeDetail("number", value), expected: range };
-      const hint = rangeHint({ value, path, root, unit, maximum });
-      return {
-        pointer,
-        code: "out-of-range",
-        detail: `${value} is out of range (${range}).${hint}${more}`,
-        expected: range,
-      };
-    }
-  }
+  return {
+    pointer,
+    code: "wrong-format",
+    detail: `${shown(value)} will not do as ${String(path.at(-1))}; give it a short name.`,
+    expected,
+  };
 }

@@ -11,12 +11,13 @@ const malformed = (detail: string): Parsed => ({ ok: false, problem: problem("ma
 /** Parses a JSON body of UTF-8 bytes, nested at most 32 deep. */
 export function parseBody(body: Uint8Array): Parsed {
   if (body.length === 0) return malformed("The body is empty; send a JSON object.");
-  if (deeperThan(body, NESTING)) return malformed(`Objects and arrays nest more than ${NESTING} deep.`);
+  if (deeperThan(body, NESTING))
+    return malformed(`Objects and arrays nest more than ${NESTING} deep; no request needs half of that.`);
   let text: string;
   try {
     text = new TextDecoder("utf-8", { fatal: true }).decode(body);
   } catch {
-    return malformed("The body is not UTF-8.");
+    return malformed("The body is not UTF-8; encode the text as UTF-8 before sending it.");
   }
   try {
     return { ok: true, value: JSON.parse(text) };

@@ -24,8 +24,22 @@ function bare(schema: z.ZodType): z.ZodType {
   while (at instanceof z.ZodOptional || at instanceof z.ZodNullable || at instanceof z.ZodDefault) {
     at = at.unwrap() as z.ZodType;
   }
-  // A number or a column: what is asked of it here is asked of the number.
-  return at instanceof z.ZodUnion && !(at instanceof z.ZodDiscriminatedUnion) ? (at.options[0] as z.ZodType) : at;
+  return at;
+}
+
+/** The alternatives of a union that no member tells apart (a number or a column, a word or an object); else none. */
+function alternativesOf(schema: z.ZodType | undefined): readonly z.ZodType[] {
+  return schema instanceof z.ZodUnion && !(schema instanceof z.ZodDiscriminatedUnion)
+    ? (schema.options as z.ZodType[])
+    : [];
+}
+
+/** Of alternatives the object where the value is one, else the first; any other schema itself. */
+function chosen(schema: z.ZodType, value: unknown): z.ZodType {
+  const alternatives = alternativesOf(schema);
+  if (alternatives.length === 0) return schema;
+  const isObject = typeof value === "object" && value !== null && !Array.isArray(value);
+  return alternatives.find((option) => option instanceof z.ZodObject === isObject) ?? alternatives[0];
 }
 
 /** The kinds a discriminated union knows; none for any other schema. */
@@ -39,11 +53,13 @@ function optionFor(schema: z.ZodDiscriminatedUnion, value: unknown): z.ZodType |
   return schema.options[index] as z.ZodType | undefined;
 }
 
-/** The schema that a path of `value` meets, wrappers taken off and unions chosen by `kind`; undefined where none does. */
-export function schemaAt(schema: z.ZodType, path: Path, value: unknown): z.ZodType | undefined {
+/** What a path of `value` meets, unions on the way chosen by what stands there; undefined where nothing does. */
+function reach(schema: z.ZodType, path: Path, value: unknown): z.ZodType | undefined {
   let at: z.ZodType | undefined = bare(schema);
   for (const [depth, step] of path.entries()) {
-    if (at instanceof z.ZodDiscriminatedUnion) at = optionFor(at, valueAt(value, path.slice(0, depth)));
+    const here = valueAt(value, path.slice(0, depth));
+    at = chosen(at, here);
+    if (at instanceof z.ZodDiscriminatedUnion) at = optionFor(at, here);
     if (at instanceof z.ZodObject) at = at.shape[String(step)] as z.ZodType | undefined;
     else if (at instanceof z.ZodArray) at = at.element as z.ZodType;
     else return undefined;
@@ -51,6 +67,24 @@ export function schemaAt(schema: z.ZodType, path: Path, value: unknown): z.ZodTy
     at = bare(at);
   }
   return at;
+}
+
+/** The schema that a path of `value` meets, wrappers taken off, one of alternatives chosen; undefined where none does. */
+export function schemaAt(schema: z.ZodType, path: Path, value: unknown): z.ZodType | undefined {
+  const at = reach(schema, path, value);
+  return at === undefined ? undefined : chosen(at, valueAt(value, path));
+}
+
+/** The alternatives at a path of `value`; none where there is no choice. */
+export function alternativesAt(schema: z.ZodType, path: Path, value: unknown): readonly z.ZodType[] {
+  return alternativesOf(reach(schema, path, value));
+}
+
+/** The kinds of a discriminated union at a path of `value` that know a member. */
+export function kindsWith(member: string, schema: z.ZodType, path: Path, value: unknown): string[] {
+  const at = schemaAt(schema, path, value);
+  if (!(at instanceof z.ZodDiscriminatedUnion)) return [];
+  return kindsOf(at).filter((_kind, index) => Object.hasOwn((at.options[index] as z.ZodObject).shape, member));
 }
 
 /** The members that may stand in the object at a path of `value`. */

@@ -44,13 +44,13 @@ export const SingleDiodeSchema = z
     cellsInSeries: CELLS,
     photocurrent: quantity("A", "Photocurrent at standard test conditions.", CURRENT),
     saturationCurrent: quantity("A", "Saturation current of the diode at 25 degC.", {
-      minimum: 1e-30,
+      minimum: 1e-60,
       maximum: 1,
     }),
-    seriesResistance: quantity("ohm", "Series resistance of the module.", { minimum: 0, maximum: 100 }),
+    seriesResistance: quantity("ohm", "Series resistance of the module.", { minimum: 0, maximum: 1e6 }),
     shuntResistance: quantity("ohm", "Shunt resistance of the module at 1000 W/m2; null: infinite.", {
       minimum: 0.01,
-      maximum: 1e9,
+      maximum: 1e15,
     }).nullable(),
     idealityVoltage: quantity("V", "n Ns k T/q of the whole module at 25 degC (about 0.026 V to 0.05 V a cell).", {
       minimum: 0.001,
