@@ -8,7 +8,8 @@ const FILE = new URL("openapi.json", import.meta.url);
 
 /** The document as the service serves it, laid out to be read and compared. */
 async function documentOf(): Promise<string> {
-  const app = createApp(async () => ({ ok: false, problem: problem("draining", "Nothing is computed here.") }), {
+  const refuse = async () => ({ ok: false as const, problem: problem("draining", "Nothing is computed here.") });
+  const app = createApp(refuse, {
     limits: CEILINGS,
     keys: [],
     state: () => "ready",
@@ -16,6 +17,7 @@ async function documentOf(): Promise<string> {
     idleTime: 1000,
     uploadTime: 1000,
     heldBytes: 0,
+    portfolio: { perform: refuse, stepsAtOnce: 1, most: 1, stallTime: 1000, silence: 1000 },
   });
   const answer = await app.request("/openapi.json");
   return `${JSON.stringify(await answer.json(), null, 2)}\n`;

@@ -6,7 +6,7 @@ import { serve } from "./http/serve.ts";
 import type { ServiceState } from "./http/services.ts";
 import { stopOnSignal } from "./http/stop.ts";
 import { createCompute } from "./pool/compute.ts";
-import { createPool } from "./pool/pool.ts";
+import { createPool, stepsAtOnce } from "./pool/pool.ts";
 
 const config = configOrExit();
 const log = pino({ name: "kneegap", level: config.logLevel, redact: ["authorization", "*.authorization"] });
@@ -28,6 +28,13 @@ const app = createApp(createCompute(pool, config.limits), {
   idleTime: 30_000,
   uploadTime: 300_000,
   heldBytes: 1024 ** 3,
+  portfolio: {
+    perform: (step, signal) => pool.runStep(step, signal),
+    stepsAtOnce: stepsAtOnce(config.threads),
+    most: 64,
+    stallTime: 60_000,
+    silence: 10_000,
+  },
 });
 const listening = await serve(app, {
   host: config.host,

@@ -1,10 +1,11 @@
 import { isJson, isText } from "../src/media-type.ts";
 import type { Columns } from "./find-columns.ts";
 import type { Content, OperationEntry } from "./list-operations.ts";
+import { takesLines } from "./list-operations.ts";
 
 const WIDTH = 112;
 
-/** The body of `client.ts`: a class with one documented method for each operation. `schemas` is the text of `schema.ts`, where the types' names are looked up. */
+/** The body of `client.ts`: a class with one documented method for each operation but those that take lines, see {@link takesLines}. `schemas` is the text of `schema.ts`, where the types' names are looked up. */
 export function clientFile(operations: readonly OperationEntry[], columns: Columns, schemas: string): string {
   const names = new Set<string>();
   const typeOf = (operation: OperationEntry, side: "requestBody" | "response", content: Content): string => {
@@ -12,7 +13,8 @@ export function clientFile(operations: readonly OperationEntry[], columns: Colum
     names.add(name);
     return name === "operations" ? inlineType(operation, side, content) : name;
   };
-  const methods = operations.map((operation) => method(operation, columns, typeOf)).join("\n\n");
+  const thin = operations.filter((operation) => !takesLines(operation));
+  const methods = thin.map((operation) => method(operation, columns, typeOf)).join("\n\n");
   const columnTypes = ["ColumnKind", "Received", "Sent"].filter(
     (name) => name === "ColumnKind" || methods.includes(`${name}<`),
   );
@@ -21,7 +23,7 @@ import type { CallOptions, RequestFunction } from "../operation.ts";
 import { operationTable } from "./operations.ts";
 import type { ${[...names].sort().join(", ")} } from "./schema.ts";
 
-/** The operations of the service, one method each. \`C\` says how columns arrive. */
+/** The operations of the service, one method each; those that take lines are in \`kneegap.ts\`. \`C\` says how columns arrive. */
 export class Operations<C extends ColumnKind> {
   readonly #request: RequestFunction;
 

@@ -21,6 +21,7 @@ export interface OperationEntry {
   readonly responseSchemas: readonly unknown[];
 }
 
+const LINES = "application/x-ndjson";
 const METHODS = new Set(["get", "post", "put", "patch", "delete"]);
 const NOT_METHODS = new Set(["summary", "description", "servers", "parameters"]);
 const TAKEN_NAMES = new Set(["close", "constructor"]);
@@ -45,6 +46,11 @@ export function listOperations(document: ApiDocument): OperationEntry[] {
   const twice = entries.find((entry, index) => entry.operationId === entries[index + 1]?.operationId);
   if (twice !== undefined) throw new Error(`the operationId ${twice.operationId} comes twice`);
   return entries;
+}
+
+/** Whether an operation's request is lines of JSON: too much for one value, so that a thin generated method would not do. */
+export function takesLines({ request }: OperationEntry): boolean {
+  return request?.mediaType === LINES;
 }
 
 function readOperation(document: ApiDocument, operation: Node, place: string): OperationEntry {

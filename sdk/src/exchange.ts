@@ -36,14 +36,21 @@ export async function exchange(
     if (bytes === null) throw new AnswerTooLargeError(bounds.maximumBytes, context);
     return { status: statusCode, headers, bytes };
   } catch (cause) {
-    if (bounds.signal.aborted) throw bounds.signal.reason;
-    if (cause instanceof KneegapError || isMisuse(cause)) throw cause;
-    // Once the answer has begun, undici's parser error means that a chunked body was cut short.
-    if (!began && isNotHttp(cause)) {
-      throw new ProtocolError("it is not HTTP that can be read", null, { ...context, cause });
-    }
-    throw new ConnectionError({ ...context, cause });
+    throw bounds.signal.aborted ? bounds.signal.reason : exchangeFault(cause, began, context);
   }
+}
+
+/**
+ * The error of the SDK for what undici threw before an answer's last byte; `began` says whether the answer had begun. An
+ * error of the SDK stays as it is, and so does a fault in how undici was called, which is ours.
+ */
+export function exchangeFault(cause: unknown, began: boolean, context: CallContext): unknown {
+  if (cause instanceof KneegapError || isMisuse(cause)) return cause;
+  // Once the answer has begun, undici's parser error means that a chunked body was cut short.
+  if (!began && isNotHttp(cause)) {
+    return new ProtocolError("it is not HTTP that can be read", null, { ...context, cause });
+  }
+  return new ConnectionError({ ...context, cause });
 }
 
 /** undici leaves the parser error's `code` undefined, so its name has to do. */

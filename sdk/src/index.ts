@@ -20,11 +20,22 @@ export { ProtocolError } from "./errors/protocol-error.ts";
 export { RateLimitedError } from "./errors/rate-limited-error.ts";
 export { RequestProblemError } from "./errors/request-problem-error.ts";
 export { ServerProblemError } from "./errors/server-problem-error.ts";
+export type { SitePlace } from "./errors/site-input-error.ts";
+export { SiteInputError } from "./errors/site-input-error.ts";
 export { TimeoutError } from "./errors/timeout-error.ts";
 export { UnavailableError } from "./errors/unavailable-error.ts";
 export type * from "./generated/models.ts";
 export { Kneegap } from "./kneegap.ts";
 export type { CallOptions } from "./operation.ts";
+export type {
+  MergedTotals,
+  PortfolioDefaultsRequest,
+  PortfolioLine,
+  PortfolioRefusal,
+  PortfolioSiteRequest,
+} from "./portfolio/portfolio-lines.ts";
+export type { PortfolioOptions, PortfolioProgress } from "./portfolio/portfolio-options.ts";
+export type { PortfolioRun, PortfolioSites } from "./portfolio/portfolio-run.ts";
 export type { ReadClimate, ReadHorizontal, ReadIrradiance, ReadPlaneOfArray, ReadTemperature } from "./read-climate.ts";
 export { readClimate } from "./read-climate.ts";
 export type { RetryOptions } from "./retry.ts";

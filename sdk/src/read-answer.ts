@@ -25,20 +25,33 @@ export interface Answer {
  * the rest, undefined when the operation answers without a body. Throws the error that belongs to anything else.
  */
 export function readAnswer(operation: Operation, answer: Answer, columns: ColumnKind, context: CallContext): unknown {
-  if (!operation.successStatuses.includes(answer.status)) throw errorFor(answer, context);
+  if (!operation.successStatuses.includes(answer.status)) throw errorOf(answer, context);
   const expected = operation.responseMediaType;
   if (expected === null) return undefined;
-  const received = mediaType(answer);
-  if (received !== expected) {
-    throw new ProtocolError(`${answer.status} with ${received} instead of ${expected}`, answer.status, context);
-  }
+  checkMediaType(operation, answer, context);
   if (!isJson(expected)) return isText(expected) ? readText(answer, context) : answer.bytes;
   const value = readJson(answer, context);
-  if (columns === "plain") return value;
+  return columns === "plain" ? value : withTypedColumns(operation, value, { ...context, status: answer.status });
+}
+
+/** Throws ProtocolError unless a success has the media type that the operation answers with. */
+export function checkMediaType(operation: Operation, answer: Omit<Answer, "bytes">, context: CallContext): void {
+  const received = mediaType(answer);
+  if (received === operation.responseMediaType) return;
+  const reason = `${answer.status} with ${received} instead of ${operation.responseMediaType}`;
+  throw new ProtocolError(reason, answer.status, context);
+}
+
+/** `value` with the operation's columns typed, in place. Throws ProtocolError for a column of anything but numbers and null. */
+export function withTypedColumns(
+  operation: Operation,
+  value: unknown,
+  context: CallContext & { readonly status: number },
+): unknown {
   try {
     return typeColumns(value, operation.columns);
   } catch (cause) {
-    throw new ProtocolError((cause as Error).message, answer.status, { ...context, cause });
+    throw new ProtocolError((cause as Error).message, context.status, { ...context, cause });
   }
 }
 
@@ -48,17 +61,24 @@ export function headerField({ headers }: Pick<Answer, "headers">, name: string):
   return Array.isArray(field) ? field[0] : field;
 }
 
-function errorFor(answer: Answer, context: CallContext): KneegapError {
+/** The error that belongs to an answer whose status is no success. */
+export function errorOf(answer: Answer, context: CallContext): KneegapError {
   const { status } = answer;
   const problem = readProblem(answer, context);
   const wait = retryAfter(headerField(answer, "retry-after"), headerField(answer, "date"), Date.now());
-  const maybe: ProblemAnswer = { status, problem, retryAfter: wait };
-  if (status === 429) return new RateLimitedError(maybe, context);
-  if (status === 408 || (status >= 502 && status <= 504)) return new UnavailableError(maybe, context);
-  if (problem === null || status < 400) {
-    return new ProtocolError(`${status} with ${mediaType(answer)}, without a problem document`, status, context);
-  }
-  const certain: ProblemAnswer<Problem> = { status, problem, retryAfter: wait };
+  return (
+    problemError({ status, problem, retryAfter: wait }, context) ??
+    new ProtocolError(`${status} with ${mediaType(answer)}, without a problem document`, status, context)
+  );
+}
+
+/** The error of a problem's family, by its status; null for a status that is no error, or that needs a problem and has none. */
+export function problemError(answer: ProblemAnswer, context: CallContext): KneegapError | null {
+  const { status, problem } = answer;
+  if (status === 429) return new RateLimitedError(answer, context);
+  if (status === 408 || (status >= 502 && status <= 504)) return new UnavailableError(answer, context);
+  if (problem === null || status < 400) return null;
+  const certain: ProblemAnswer<Problem> = { ...answer, problem };
   return status < 500 ? new RequestProblemError(certain, context) : new ServerProblemError(certain, context);
 }
 
@@ -91,7 +111,7 @@ function readText(answer: Answer, context: CallContext): string {
 }
 
 /** The media type without its parameters, in lower case; "no content type" when the field is missing. */
-function mediaType(answer: Answer): string {
+function mediaType(answer: Pick<Answer, "headers">): string {
   const field = headerField(answer, "content-type");
   return field === undefined ? "no content type" : field.split(";", 1)[0].trim().toLowerCase();
 }

@@ -39,3 +39,12 @@ export function retryDelay(error: unknown, attempt: number, retry: Required<Retr
   if (asked !== null) return asked + retry.random() * retry.baseDelay;
   return retry.random() * Math.min(retry.maximumDelay, retry.baseDelay * 2 ** (attempt - 1));
 }
+
+/** Waits `delay` ms. Throws the signal's reason when it fires: the timer's own rejection says only that it was aborted. */
+export async function sleep(retry: Required<RetryOptions>, delay: number, signal: AbortSignal): Promise<void> {
+  try {
+    await retry.sleep(delay, signal);
+  } catch (error) {
+    throw signal.aborted ? signal.reason : error;
+  }
+}

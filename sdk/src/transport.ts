@@ -8,9 +8,11 @@ import { ClosedError } from "./errors/closed-error.ts";
 import type { CallContext } from "./errors/kneegap-error.ts";
 import type { Message } from "./exchange.ts";
 import { exchange } from "./exchange.ts";
+import type { LineRequest } from "./exchange-lines.ts";
+import { exchangeLines } from "./exchange-lines.ts";
 import type { CallOptions, Operation } from "./operation.ts";
 import { headerField, readAnswer } from "./read-answer.ts";
-import { isRetriable, retryDelay } from "./retry.ts";
+import { isRetriable, retryDelay, sleep } from "./retry.ts";
 
 const REQUEST_ID = /^[A-Za-z0-9._-]{1,64}$/;
 /** Below node's own 5 s: of the two ends of an idle connection, ours must let go first. */
@@ -54,14 +56,39 @@ export class Transport {
    */
   async request(operation: Operation, body: unknown, options: CallOptions = {}): Promise<unknown> {
     const requestId = checkRequestId(options.requestId ?? randomUUID());
+    return this.hold(requestId, () => this.#start(operation, body, { ...options, requestId }));
+  }
+
+  /**
+   * Sends `lines` to `operation` once, without a deadline and without retries, and hands its answer's lines on, see
+   * {@link exchangeLines}. To be called within {@link Transport.hold}.
+   */
+  requestLines(
+    operation: Operation,
+    lines: Uint8Array,
+    bounds: Pick<LineRequest, "signal" | "silence" | "onLine">,
+    context: CallContext,
+  ): Promise<void> {
+    const message = this.#message(operation, lines, context.requestId);
+    const { maximumAnswerBytes: maximumBytes } = this.#settings;
+    return exchangeLines(this.#pool, { operation, message, maximumBytes, ...bounds }, context);
+  }
+
+  /** Does `work` as one call: refused with ClosedError after `close()`, and waited for by it. */
+  async hold<T>(requestId: string, work: () => Promise<T>): Promise<T> {
     if (this.#closing !== null) throw new ClosedError({ requestId, attempts: 0 });
-    const answer = this.#start(operation, body, { ...options, requestId });
-    this.#underWay.add(answer);
+    const done = work();
+    this.#underWay.add(done);
     try {
-      return await answer;
+      return await done;
     } finally {
-      this.#underWay.delete(answer);
+      this.#underWay.delete(done);
     }
+  }
+
+  /** The client's own settings, for calls that do their retries themselves. */
+  get settings(): Settings {
+    return this.#settings;
   }
 
   /** Waits for the calls under way, then closes the connections. Calling it again returns the same promise. */
@@ -95,7 +122,7 @@ export class Transport {
         if (progress.attempts >= call.attempts || !isRetriable(error)) throw error;
         const delay = retryDelay(error, progress.attempts, retry);
         if (delay >= call.deadline.remaining()) throw error;
-        await this.#sleep(delay, call.deadline.signal);
+        await sleep(retry, delay, call.deadline.signal);
       }
     }
   }
@@ -105,15 +132,6 @@ export class Transport {
     const answer = await exchange(this.#pool, message, { signal: deadline.signal, maximumBytes }, context);
     const requestId = headerField(answer, "x-request-id") ?? context.requestId;
     return readAnswer(operation, answer, columns, { ...context, requestId });
-  }
-
-  /** The timer's rejection says only that it was aborted; the signal's reason says why. */
-  async #sleep(delay: number, signal: AbortSignal): Promise<void> {
-    try {
-      await this.#settings.retry.sleep(delay, signal);
-    } catch (error) {
-      throw signal.aborted ? signal.reason : error;
-    }
   }
 
   #message(operation: Operation, body: unknown, requestId: string): Message {
@@ -128,7 +146,8 @@ export class Transport {
   }
 }
 
-function checkRequestId(requestId: string): string {
+/** Throws TypeError for a request id that the service would not take. */
+export function checkRequestId(requestId: string): string {
   if (REQUEST_ID.test(requestId)) return requestId;
   throw new TypeError("requestId must be 1 to 64 characters out of A-Z, a-z, 0-9, dot, underscore and hyphen");
 }

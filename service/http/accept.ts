@@ -15,13 +15,16 @@ export function weightOf(header: string, names: readonly string[]): number | nul
   return listed === undefined ? null : weights.get(listed)!;
 }
 
-/** Refuses with 406 what will not take JSON. */
-export const checkAccept: MiddlewareHandler<Environment> = async (context, next) => {
-  const accept = context.req.header("accept") ?? "";
-  const weight = accept === "" ? 1 : weightOf(accept, ["application/json", "application/*", "*/*"]);
-  if (weight !== null && weight > 0) return next();
-  return respondProblem(
-    context,
-    problem("not-acceptable", "Answers are application/json; let the Accept header say so."),
-  );
-};
+/** The media type of lines of JSON. */
+export const LINES_TYPE = "application/x-ndjson";
+
+/** Refuses with 406 what will not take the form of answer that its path gives: lines for portfolios, else JSON. */
+export function checkAccept(linesPath: string): MiddlewareHandler<Environment> {
+  return async (context, next) => {
+    const type = context.req.path === linesPath ? LINES_TYPE : "application/json";
+    const accept = context.req.header("accept") ?? "";
+    const weight = accept === "" ? 1 : weightOf(accept, [type, "application/*", "*/*"]);
+    if (weight !== null && weight > 0) return next();
+    return respondProblem(context, problem("not-acceptable", `Answers are ${type}; let the Accept header say so.`));
+  };
+}

@@ -71,6 +71,16 @@ export const TUNING_EXAMPLE = {
   range: { from: 0.7, to: 0.9 },
 };
 
+/** The request example of `portfolio`: lines. */
+export const PORTFOLIO_EXAMPLE = [
+  { kind: "defaults", module: MODULE, candidates: COMPARISON_EXAMPLE.candidates, baseline: "one voltage" },
+  { kind: "climate", name: "south shore", climate: CLIMATE },
+  { kind: "site", id: "Heron Bank", climate: { kind: "named", name: "south shore" } },
+  { kind: "site", id: "Old Groyne", climate: { kind: "named", name: "south shore" }, count: 3, group: "groynes" },
+]
+  .map((line) => `${JSON.stringify(line)}\n`)
+  .join("");
+
 /**
  * What the service answers to an example, its numbers shortened to six digits so that the document reads well and does
  * not change with the last bits. Throws Error for an example that is refused.

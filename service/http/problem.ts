@@ -1,3 +1,4 @@
+import { encodeProblem } from "../wire/encode/problem.ts";
 import type { Problem } from "../wire/problem.ts";
 import { PROBLEMS } from "../wire/problem.ts";
 import type { RequestContext } from "./app-type.ts";
@@ -6,18 +7,8 @@ import type { RequestContext } from "./app-type.ts";
 export const PROBLEM_TYPE = "application/problem+json";
 
 /** The JSON text of a problem. */
-export function problemText({ code, detail, errorCount, errors }: Problem, requestId: string): string {
-  const { status, title } = PROBLEMS[code];
-  return JSON.stringify({
-    type: `urn:kneegap:problem:${code}`,
-    title,
-    status,
-    detail,
-    code,
-    requestId,
-    errorCount,
-    errors,
-  });
+export function problemText(of: Problem, requestId: string): string {
+  return JSON.stringify(encodeProblem(of, requestId));
 }
 
 /** Makes a problem the response: the only place where one does (and `serve.ts`, where there is no request to answer). */

@@ -26,7 +26,7 @@ const NOTHING = Promise.resolve({ done: true as const, value: undefined });
 
 /** Reads a JSON body, plain or gzip, within the limits of size and time; the size is checked while reading. */
 export async function readBody(context: RequestContext, services: Services): Promise<ReadBody> {
-  const form = refuseForm(context);
+  const form = refuseForm(context, "application/json");
   if (form !== null) return refuse(form);
   const limit = services.limits.bodyBytes;
   if (Number(context.req.header("content-length") ?? 0) > limit) return refuse(tooLarge(limit));
@@ -35,19 +35,19 @@ export async function readBody(context: RequestContext, services: Services): Pro
   return inflate(read, limit, services.budget);
 }
 
-/** Why the form of the body is none of ours; null when it is. */
-function refuseForm(context: RequestContext): Problem | null {
+/** Why the form of the body is not that of `mediaType`; null when it is. */
+export function refuseForm(context: RequestContext, mediaType: string): Problem | null {
   const [type, ...parameters] = (context.req.header("content-type") ?? "").toLowerCase().split(";");
   const charset = parameters.map((parameter) => parameter.trim()).find((parameter) => parameter.startsWith("charset="));
-  if (type.trim() !== "application/json" || (charset ?? "charset=utf-8").replaceAll('"', "") !== "charset=utf-8") {
-    return problem("unsupported-media-type", "Send the body as content-type: application/json, in UTF-8.");
+  if (type.trim() !== mediaType || (charset ?? "charset=utf-8").replaceAll('"', "") !== "charset=utf-8") {
+    return problem("unsupported-media-type", `Send the body as content-type: ${mediaType}, in UTF-8.`);
   }
   if (encodingOf(context) !== null) return null;
   return problem("unsupported-media-type", "The only content-encoding is gzip; leave the header out for a plain body.");
 }
 
 /** How the body is encoded; null: in a way that is none of ours. */
-function encodingOf(context: RequestContext): "gzip" | "identity" | null {
+export function encodingOf(context: RequestContext): "gzip" | "identity" | null {
   const encoding = (context.req.header("content-encoding") ?? "identity").trim().toLowerCase();
   return encoding === "gzip" || encoding === "identity" ? encoding : null;
 }

@@ -1,5 +1,6 @@
 import type { Compute } from "../pool/compute.ts";
 import type { Limits } from "../wire/limits.ts";
+import type { Step, StepAnswer, StepName } from "../wire/portfolio/step.ts";
 import type { BodyBudget } from "./body-budget.ts";
 
 /** What the service says of itself: `warming` until the workers are warm, `draining` once it was told to stop. */
@@ -17,6 +18,22 @@ export interface Log {
   error(values: object, message: string): void;
 }
 
+/** Has a step of a portfolio performed, somewhere. The signal says that nobody waits any more. Never rejects. */
+export type PerformStep = <Name extends StepName>(step: Step<Name>, signal: AbortSignal) => Promise<StepAnswer<Name>>;
+
+/** How portfolios are answered. Times in ms. */
+export interface PortfolioService {
+  perform: PerformStep;
+  /** Steps of one portfolio at once; no further line is read meanwhile. */
+  stepsAtOnce: number;
+  /** Portfolios answered at once; one more is refused. */
+  most: number;
+  /** One in which no byte moves either way for this long, and nothing is computed, is ended. */
+  stallTime: number;
+  /** After so long without a line an empty one is sent. */
+  silence: number;
+}
+
 /** How the app is set up. */
 export interface AppSettings {
   limits: Limits;
@@ -30,6 +47,7 @@ export interface AppSettings {
   uploadTime: number;
   /** All bodies together hold at most this, from their first byte until their answer, bytes. */
   heldBytes: number;
+  portfolio: PortfolioService;
 }
 
 /** What the routes work with. */

@@ -2,11 +2,10 @@ import type { z } from "@hono/zod-openapi";
 import type { ComparisonRequest } from "../studies/comparison.ts";
 import { compare } from "../studies/comparison.ts";
 import { workOf } from "../studies/work.ts";
+import { checkCandidates, decodeCandidate } from "./decode/candidate.ts";
 import { checkClimate, decodeClimate } from "./decode/climate.ts";
-import { checkConverter, decodeConverter } from "./decode/converter.ts";
+import { checkConverter } from "./decode/converter.ts";
 import { checkModule, decodeModule } from "./decode/module.ts";
-import { nearestName } from "./decode/nearest-name.ts";
-import { decodeRule } from "./decode/rule.ts";
 import { defineOperation } from "./define-operation.ts";
 import { jsonText } from "./encode/byte-writer.ts";
 import { encodeCaution } from "./encode/caution.ts";
@@ -24,36 +23,9 @@ function check(raw: Raw, limits: Limits): Flaw[] {
   return [
     ...checkModule(raw.module),
     ...checkConverter(raw.converter, "/converter"),
-    ...raw.candidates.flatMap(({ converter }, index) => checkConverter(converter, `/candidates/${index}/converter`)),
-    ...checkCandidates(raw, limits),
+    ...checkCandidates(raw.candidates, raw.baseline, limits),
     ...checkClimate(raw.climate, limits),
   ];
-}
-
-function checkCandidates({ candidates, baseline }: Raw, limits: Limits): Flaw[] {
-  if (candidates.length > limits.candidates) {
-    const detail = `There are ${candidates.length} candidates.`;
-    return [{ pointer: "/candidates", code: "too-many", detail, expected: `at most ${limits.candidates} candidates` }];
-  }
-  const flaws: Flaw[] = [];
-  const labels = candidates.map(({ label }) => label);
-  for (const [index, label] of labels.entries()) {
-    if (labels.indexOf(label) === index) continue;
-    const detail = `The label "${label}" is that of candidate ${labels.indexOf(label)} too; give each its own.`;
-    flaws.push({
-      pointer: `/candidates/${index}/label`,
-      code: "label-taken",
-      detail,
-      expected: "a label not used before",
-    });
-  }
-  if (baseline !== undefined && !labels.includes(baseline)) {
-    const meant = nearestName(baseline, labels);
-    const question = meant === undefined ? "" : ` Did you mean "${meant}"?`;
-    const detail = `No candidate is labelled "${baseline}".${question}`;
-    flaws.push({ pointer: "/baseline", code: "unknown-baseline", detail, expected: `one of: ${labels.join(", ")}` });
-  }
-  return flaws;
 }
 
 function decode(raw: Raw): ComparisonRequest {
@@ -62,13 +34,7 @@ function decode(raw: Raw): ComparisonRequest {
     array: raw.array ?? ArraySchema.parse({}),
     climate: decodeClimate(raw.climate),
     mode: raw.mode,
-    candidates: raw.candidates.map((candidate, index) => ({
-      label: candidate.label,
-      rule: decodeRule(candidate.rule),
-      converter: decodeConverter(candidate.converter ?? raw.converter),
-      price: candidate.price ?? null,
-      pointer: `/candidates/${index}/rule`,
-    })),
+    candidates: raw.candidates.map((candidate, index) => decodeCandidate(candidate, index, raw.converter)),
     baseline: raw.baseline ?? null,
     energyValue: raw.energyValue ?? null,
     recordLowTemperature: raw.recordLowTemperature,

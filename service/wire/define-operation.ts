@@ -3,7 +3,7 @@ import { StudyError } from "../studies/study-error.ts";
 import { explain } from "./decode/explain.ts";
 import { parseBody } from "./decode/parse-body.ts";
 import type { Limits } from "./limits.ts";
-import type { Answer, Operation } from "./operation.ts";
+import type { Answer, Operation, Refusal } from "./operation.ts";
 import type { Flaw, Problem } from "./problem.ts";
 import { flawed, problem } from "./problem.ts";
 
@@ -27,8 +27,8 @@ export function defineOperation<Schema extends z.ZodType, Request>(of: Definitio
   return (body, limits) => {
     const parsed = parseBody(body);
     if (!parsed.ok) return parsed;
-    const read = of.schema.safeParse(parsed.value);
-    if (!read.success) return refuse(flawed(explain(read.error.issues, of.schema, parsed.value)));
+    const read = conform(of.schema, parsed.value);
+    if (!read.ok) return read;
     const flaws = of.check(read.data, limits);
     if (flaws.length > 0) return refuse(flawed(flaws));
     const request = of.decode(read.data);
@@ -38,10 +38,22 @@ export function defineOperation<Schema extends z.ZodType, Request>(of: Definitio
   };
 }
 
-function tooMuch(work: number, limit: number): Problem {
+/** A value as its schema has it, or what to change for it to conform. */
+export function conform<Schema extends z.ZodType>(
+  schema: Schema,
+  value: unknown,
+): { ok: true; data: z.output<Schema> } | Refusal {
+  const read = schema.safeParse(value);
+  if (read.success) return { ok: true, data: read.data };
+  const { flaws, count } = explain(read.error.issues, schema, value);
+  return refuse(flawed(flaws, count));
+}
+
+/** The problem of a request whose work is above the limit, both in control periods. */
+export function tooMuch(work: number, limit: number): Problem {
   return problem(
     "too-much-work",
-    `The request is as much work as ${Math.round(work)} control periods; the limit is ${limit}. Send fewer samples or candidates at once, or a coarser step.`,
+    `The request is as much work as ${Math.round(work)} control periods; the limit is ${limit}. Send fewer samples, sites, candidates or points at once, or choose a coarser step or a longer controlPeriod.`,
   );
 }
 
@@ -50,16 +62,21 @@ function perform(answer: () => Uint8Array): Answer {
   try {
     return { ok: true, bytes: answer(), contentType: "application/json" };
   } catch (error) {
-    if (error instanceof StudyError) {
-      const { pointer, code, message, expected } = error;
-      return refuse(flawed([{ pointer, code, detail: message, ...(expected === undefined ? {} : { expected }) }]));
-    }
-    return failure(error);
+    return refusalOf(error);
   }
 }
 
+/** The refusal that an error of the studies means; any other is a defect. */
+export function refusalOf(error: unknown): Refusal {
+  if (error instanceof StudyError) {
+    const { pointer, code, message, expected } = error;
+    return refuse(flawed([{ pointer, code, detail: message, ...(expected === undefined ? {} : { expected }) }]));
+  }
+  return failure(error);
+}
+
 /** The answer of a defect: nothing of it leaks, the log gets it as plain text. */
-export function failure(error: unknown): Answer {
+export function failure(error: unknown): Refusal {
   const detail = "The service failed at this request; quote the request id.";
   const fault = error instanceof Error ? (error.stack ?? error.message) : String(error);
   return { ok: false, problem: problem("internal", detail), fault };

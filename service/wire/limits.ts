@@ -10,6 +10,14 @@ export const CEILINGS = {
   controlPeriods: 200_000_000,
   /** Seconds of computing. */
   computeSeconds: 50,
+  /** Bytes of one line of a portfolio. */
+  lineBytes: 16 * 1024 * 1024,
+  /** Sites of a portfolio. */
+  sites: 100_000,
+  /** Named climates of a portfolio. */
+  namedClimates: 64,
+  /** Bytes of the lines that name them, together. */
+  namedClimateBytes: 64 * 1024 * 1024,
 } as const;
 
 /** The limits in force. */
@@ -20,3 +28,6 @@ export const NESTING = 32;
 
 /** How long a climate may last, in years of 365.25 days. */
 export const CLIMATE_YEARS = 100;
+
+/** Rows of a portfolio's totals, one a label and one a label in each group: what its memory grows with beside its sites. */
+export const TOTALS_ROWS = 25_000;

@@ -1,6 +1,7 @@
 import type { z } from "@hono/zod-openapi";
 import type { ModuleFitRequest, ModuleFitResult } from "../studies/module-fit.ts";
 import { fitModule } from "../studies/module-fit.ts";
+import { checkMeasuredCurve } from "./decode/measured-curve.ts";
 import { checkModule, decodeModule } from "./decode/module.ts";
 import { defineOperation } from "./define-operation.ts";
 import { jsonText } from "./encode/byte-writer.ts";
@@ -15,16 +16,7 @@ type Raw = z.output<typeof ModuleFitRequestSchema>;
 const WORK = 400_000;
 
 function check({ module }: Raw): Flaw[] {
-  if (module.kind === "datasheet") return checkModule(module);
-  if (module.current.length === module.voltage.length) return [];
-  return [
-    {
-      pointer: "/module/current",
-      code: "unequal-columns",
-      detail: `There are ${module.current.length} currents and ${module.voltage.length} voltages; give one of each a point.`,
-      expected: `${module.voltage.length} values`,
-    },
-  ];
+  return module.kind === "datasheet" ? checkModule(module) : checkMeasuredCurve(module);
 }
 
 function decode({ module }: Raw): ModuleFitRequest {

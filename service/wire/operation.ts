@@ -1,13 +1,15 @@
 import type { Limits } from "./limits.ts";
 import type { Problem } from "./problem.ts";
 
-/**
- * What comes back from an operation: bytes to send, or why not. Plain data, so that it crosses threads whole; `fault` is
- * what a defect leaves for the log alone.
- */
-export type Answer =
-  | { ok: true; bytes: Uint8Array; contentType: string }
-  | { ok: false; problem: Problem; fault?: string };
+/** Why there is no answer; `fault` is what a defect leaves for the log alone. */
+export interface Refusal {
+  ok: false;
+  problem: Problem;
+  fault?: string;
+}
+
+/** What comes back from an operation: bytes to send, or why not. Plain data, so that it crosses threads whole. */
+export type Answer = { ok: true; bytes: Uint8Array; contentType: string } | Refusal;
 
 /** A request that was understood: how much work it is, and the work itself. */
 export interface Prepared {

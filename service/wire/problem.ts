@@ -22,7 +22,7 @@ export const PROBLEMS = {
   "not-acceptable": {
     status: 406,
     title: "No such form of answer",
-    meaning: "The Accept header rules out application/json.",
+    meaning: "The Accept header rules out application/json, or application/x-ndjson for a portfolio.",
   },
   "too-slow": {
     status: 408,
@@ -32,12 +32,12 @@ export const PROBLEMS = {
   "body-too-large": {
     status: 413,
     title: "The body is too large",
-    meaning: `Above the limit of at most ${CEILINGS.bodyBytes} bytes, decompressed.`,
+    meaning: `Above the limit of at most ${CEILINGS.bodyBytes} bytes, or of ${CEILINGS.lineBytes} for a line of a portfolio, decompressed.`,
   },
   "unsupported-media-type": {
     status: 415,
     title: "No such form of body",
-    meaning: "The body must be application/json in UTF-8, plain or gzip.",
+    meaning: "The body must be application/json in UTF-8, or application/x-ndjson for a portfolio, plain or gzip.",
   },
   "invalid-request": {
     status: 422,

@@ -1,8 +1,8 @@
 import type { z } from "@hono/zod-openapi";
 import { resolveMode } from "../studies/tracking-run.ts";
 import type { TuningRequest, TuningSite } from "../studies/tuning.ts";
-import { tune, tuningCandidates } from "../studies/tuning.ts";
-import { workOf } from "../studies/work.ts";
+import { tune } from "../studies/tuning.ts";
+import { workOfTuning } from "../studies/tuning-work.ts";
 import { checkClimate, decodeClimate } from "./decode/climate.ts";
 import { checkConverter, decodeConverter } from "./decode/converter.ts";
 import { checkModule, decodeModule } from "./decode/module.ts";
@@ -85,14 +85,6 @@ function decodeSite(raw: Raw, site: { id: string } & RawSite, pointer: string): 
     mode: raw.mode,
     pointers: { module: standsAt("module"), climate: standsAt("climate") },
   };
-}
-
-function workOfTuning({ sites, rule, points }: TuningRequest): number {
-  const candidates = tuningCandidates(points, sites.length);
-  return sites.reduce((work, site) => {
-    const candidate = { rule, converter: site.converter, pointer: "" };
-    return work + candidates * workOf(site.climate, site.mode, [candidate]);
-  }, 0);
 }
 
 function answer(request: TuningRequest, raw: Raw): Uint8Array {

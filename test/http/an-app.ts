@@ -1,13 +1,23 @@
 import { createApp } from "../../service/http/app.ts";
 import type { App } from "../../service/http/app-type.ts";
-import type { AppSettings } from "../../service/http/services.ts";
+import type { AppSettings, PortfolioService } from "../../service/http/services.ts";
 import type { Compute } from "../../service/pool/compute.ts";
 import { CEILINGS } from "../../service/wire/limits.ts";
 import { performOperation } from "../../service/wire/operations.ts";
+import { performStep } from "../../service/wire/portfolio/perform-step.ts";
 import type { Json } from "../wire/requests.ts";
 
 /** Computes on the calling thread, whatever the work. */
 export const inline: Compute = async (operation, body) => performOperation(operation, body, CEILINGS);
+
+/** Portfolios computed on the calling thread, two sites at once. */
+export const inlinePortfolio: PortfolioService = {
+  perform: async (step) => performStep(step),
+  stepsAtOnce: 2,
+  most: 4,
+  stallTime: 5000,
+  silence: 5000,
+};
 
 /** A line of the log. */
 export interface LogLine {
@@ -30,6 +40,7 @@ export function anApp(settings: Partial<AppSettings> = {}, compute: Compute = in
     idleTime: 1000,
     uploadTime: 5000,
     heldBytes: 2 ** 30,
+    portfolio: inlinePortfolio,
     ...settings,
   });
   return { app, lines };

@@ -36,7 +36,7 @@ describe("the document", () => {
   });
 
   it("names every operation and says what it does", () => {
-    const others = ["document", "liveness", "readiness", "rules", "version"];
+    const others = ["document", "liveness", "portfolio", "readiness", "rules", "version"];
     const named = operations.map(([, operation]) => operation.operationId);
     expect(named.sort()).toEqual([...Object.keys(OPERATIONS), ...others].sort());
     for (const [, operation] of operations) {
@@ -66,13 +66,16 @@ describe("the document", () => {
     expect(withBody.length).toBeGreaterThan(1);
     for (const [, operation] of withBody) {
       expect(operation.requestBody.required).toBe(true);
-      expect(Object.keys(operation.requestBody.content)).toEqual(["application/json"]);
+      const type = operation.operationId === "portfolio" ? "application/x-ndjson" : "application/json";
+      expect(Object.keys(operation.requestBody.content)).toEqual([type]);
     }
   });
 });
 
 describe("the examples of the document", () => {
-  it.each(withBody)("of %s are a request that is answered, and that answer", async (place, operation) => {
+  const withObject = withBody.filter(([, { operationId }]) => operationId !== "portfolio");
+
+  it.each(withObject)("of %s are a request that is answered, and that answer", async (place, operation) => {
     const { app } = anApp();
     const { schema, example } = operation.requestBody.content["application/json"];
     conform(schema.$ref, example);
@@ -83,6 +86,21 @@ describe("the examples of the document", () => {
     conform(media.schema.$ref, body);
     conform(media.schema.$ref, media.example);
     expect(media.example).toEqual(shortened(body));
+  });
+
+  it("of a portfolio are lines that are answered, and each line conforms", async () => {
+    const { requestBody, responses } = document.paths["/v1/portfolios"].post;
+    const media = requestBody.content["application/x-ndjson"];
+    const given = media.example.split("\n").filter((line: string) => line !== "");
+    for (const line of given) conform(lineSchema(media), JSON.parse(line));
+    const headers = { "content-type": "application/x-ndjson" };
+    const answer = await anApp().app.request("/v1/portfolios", post(media.example, headers));
+    const lines: Json[] = (await answer.text())
+      .split("\n")
+      .filter((line) => line !== "")
+      .map((line) => JSON.parse(line));
+    for (const line of lines) conform(lineSchema(responses[200].content["application/x-ndjson"]), line);
+    expect(lines.map(({ kind }) => kind)).toEqual(["result", "result", "totals"]);
   });
 
   it.each(operations.filter(([place]) => place.startsWith("get")))("of %s conform", async (place, operation) => {
@@ -124,6 +142,12 @@ describe("the examples of the document", () => {
     conform("#/components/schemas/Problem", await (await app.request("/v1/estimates", post("{}"))).json());
   });
 });
+
+/** Where the schema of a body's lines stands. */
+function lineSchema(media: Json): string {
+  expect(media.schema.type).toBe("string");
+  return `#/components/schemas/${media.schema["x-line-schema"]}`;
+}
 
 function shortened(value: Json): Json {
   return JSON.parse(JSON.stringify(value), (_name, one) => {

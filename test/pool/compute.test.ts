@@ -21,6 +21,7 @@ const noted: Pool = {
     jobs.push({ ...job, body: job.body.slice() });
     return pool.run(job, signal);
   },
+  runStep: (step, signal) => pool.runStep(step, signal),
   warm: () => pool.warm(),
   close: () => pool.close(),
 };

@@ -9,6 +9,7 @@ import type { ApiDocument } from "../../sdk/scripts/api-document.ts";
 import { generateFiles } from "../../sdk/scripts/generate-files.ts";
 import { diagnose } from "./fixtures/diagnose.ts";
 import { standInDocument } from "./fixtures/stand-in-document.ts";
+import { lineOperation } from "./fixtures/stand-in-portfolio.ts";
 
 const ROOT = fileURLToPath(new URL("../..", import.meta.url));
 const GENERATE = join(ROOT, "sdk/scripts/generate.ts");
@@ -94,6 +95,22 @@ describe("generateFiles", { timeout: 30_000 }, () => {
         ];
       }`;
     expect(diagnose(await generateFiles(document), program)).toEqual([]);
+  });
+
+  it("leaves the method of an operation that takes lines to the hand, and does not let it be forgotten", async () => {
+    const files = await generateFiles(standInDocument());
+    expect(files.get("client.ts")).not.toContain("portfolio");
+    expect(files.get("operations.ts")).toContain('export type OperationByHand = "portfolio";');
+    expect(diagnose(files, `${PROGRAM}export const run = client.portfolio([{ id: "Heron Bank" }]);`)).toEqual([]);
+    const document = standInDocument();
+    document.paths["/v1/surveys"] = { post: lineOperation("survey", "EstimateRequest", "EstimateResponse") };
+    const more = await generateFiles(document);
+    const operations = more.get("operations.ts")!;
+    expect(operations).toContain('export type OperationByHand = "portfolio" | "survey";');
+    const row = operations.slice(operations.indexOf("  survey: {"));
+    expect(row).toContain('requestMediaType: "application/x-ndjson"');
+    expect(row).toContain('columns: [["traces","maximumPower","voltage"]');
+    expect(diagnose(more, PROGRAM)).toEqual([expect.stringMatching(/'Kneegap<C>' incorrectly implements.*'survey'/s)]);
   });
 
   it("lists where the columns of an answer stand, through references, lists, maps and variants", async () => {

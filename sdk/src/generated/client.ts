@@ -4,7 +4,7 @@ import type { CallOptions, RequestFunction } from "../operation.ts";
 import { operationTable } from "./operations.ts";
 import type { ComparisonAnswer, ComparisonRequest, CurveAnswer, CurveRequest, EfficiencyTestAnswer, EfficiencyTestRequest, EstimateAnswer, EstimateRequest, Health, ModuleFitAnswer, ModuleFitRequest, RuleCatalogue, TuningAnswer, TuningRequest, VersionAnswer, operations } from "./schema.ts";
 
-/** The operations of the service, one method each. `C` says how columns arrive. */
+/** The operations of the service, one method each; those that take lines are in `kneegap.ts`. `C` says how columns arrive. */
 export class Operations<C extends ColumnKind> {
   readonly #request: RequestFunction;
 

@@ -57,6 +57,15 @@ export const operationTable = {
     successStatuses: [200],
     columns: [],
   },
+  portfolio: {
+    operationId: "portfolio",
+    method: "POST",
+    path: "/v1/portfolios",
+    requestMediaType: "application/x-ndjson",
+    responseMediaType: "application/x-ndjson",
+    successStatuses: [200],
+    columns: [],
+  },
   readiness: {
     operationId: "readiness",
     method: "GET",
@@ -103,3 +112,6 @@ export const operationTable = {
     columns: [],
   },
 } as const satisfies Record<string, Operation>;
+
+/** The operations that take lines. Their methods are written by hand in `kneegap.ts`, which does not compile without them. */
+export type OperationByHand = "portfolio";

@@ -162,6 +162,26 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/v1/portfolios": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Compare candidates at many sites
+         * @description Compares candidates at many sites, streamed: one JSON object a line, in and out. A defaults line (the first or none) holds what sites share; climate lines name climates that sites below refer to; each other line is a site. Results come as sites are done, in any order, and the totals last; an answer without a totals line was cut. A line that is wrong gets a line that says why and leaves the others alone; a wrong first line refuses the request, unless it is a site or a climate. Read the answer while you send: lines are taken no faster than results are read. At most 16777216 bytes a line, 100000 sites, 64 named climates of 67108864 bytes together, and 60 s without a byte either way.
+         */
+        post: operations["portfolio"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
     "/v1/rules": {
         parameters: {
             query?: never;
@@ -903,12 +923,20 @@ export interface components {
             bodyBytes: number;
             /** @description Most candidates of a comparison. Unit: 1. */
             candidates: number;
-            /** @description Longest computing of one request. Unit: s. */
+            /** @description Longest computing of one request, or of one site of a portfolio. Unit: s. */
             computeSeconds: number;
             /** @description Most control periods of all candidates together, or as much other work. Unit: 1. */
             controlPeriods: number;
+            /** @description Longest line of a portfolio. Unit: byte. */
+            lineBytes: number;
+            /** @description Longest the lines of its named climates may be together. Unit: byte. */
+            namedClimateBytes: number;
+            /** @description Most named climates of a portfolio. Unit: 1. */
+            namedClimates: number;
             /** @description Most samples of a climate. Unit: 1. */
             samples: number;
+            /** @description Most sites of a portfolio. Unit: 1. */
+            sites: number;
         };
         /** @description The setting as sent, or its default at the first site. */
         LossAt: {
@@ -1042,6 +1070,16 @@ export interface components {
              */
             month: string;
         };
+        /** @description A climate that a line above gives by name. */
+        NamedClimate: {
+            /** @enum {string} */
+            kind: "named";
+            /**
+             * @description Of a climate line above.
+             * @example Cold Bay
+             */
+            name: string;
+        };
         /** @description Nominal operating cell temperature: t = ta + (NOCT - 20)/800 G, in any wind. */
         NoctModel: {
             /**
@@ -1102,6 +1140,219 @@ export interface components {
             power: (number | null)[];
             /** @description Voltage at the converter's terminals. Unit: V. */
             voltage?: (number | null)[];
+        };
+        /** @description Why the rest was given up; the last line. Results above stay good, sites without one were not answered. */
+        PortfolioAborted: {
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "aborted";
+            /** @description Last line of the request that was begun. Unit: 1. */
+            line: number;
+            problem: components["schemas"]["Problem"];
+        };
+        /** @description One candidate's figures at one site. */
+        PortfolioCandidate: {
+            /** @description Delivered more than the baseline. Unit: kWh. */
+            differenceToBaseline: number;
+            /** @description Delivered against the best candidate: 0 or below. Unit: kWh. */
+            differenceToBest: number;
+            energy: components["schemas"]["Energy"];
+            label: string;
+            lostByCause: components["schemas"]["LostByCause"];
+            /** @description In which the worth pays the price above the baseline's; null where there is none. Unit: years. */
+            payback: number | null;
+            /** @description From 1, by delivered energy; equals share a rank. Unit: 1. */
+            rank: number;
+            /** @description Lost by not choosing the site's own best: 0 or above. Unit: kWh. */
+            regret: number;
+            /** @description Of the difference to the baseline. Unit: the currency of energyValue. */
+            worthPerYear: number | null;
+        };
+        /** @description A climate that many sites share, given once and named by each. */
+        PortfolioClimate: {
+            climate: components["schemas"]["Climate"];
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "climate";
+            /**
+             * @description By which sites below name this climate.
+             * @example Cold Bay
+             */
+            name: string;
+        };
+        /** @description What sites share; only the first line may be one. A site's own member takes the place of the whole member here. */
+        PortfolioDefaults: {
+            array?: components["schemas"]["ArrayLayout"];
+            /**
+             * @description Label of the candidate the others are compared with; left out: the first.
+             * @example hold a fraction
+             */
+            baseline?: string;
+            /** @description 2 to 24 rules on converters; `converter` above holds for those without their own. */
+            candidates?: components["schemas"]["Candidate"][];
+            /** @description The climate itself, or the name of one given by a line above. */
+            climate?: components["schemas"]["Climate"] | components["schemas"]["NamedClimate"];
+            converter?: components["schemas"]["Converter"];
+            /** @description How many such sites there are: the totals count it as often. 1 when left out. Unit: 1. */
+            count?: number;
+            energyValue?: components["schemas"]["EnergyValue"];
+            /**
+             * @description Group whose totals the site is added to besides the whole.
+             * @example north
+             */
+            group?: string;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "defaults";
+            /**
+             * @description steady: each sample at rest. stepped: every rule at its own control period. auto: stepped up to a step of 300 s, steady above; the answer says which and why.
+             * @enum {string}
+             */
+            mode?: "auto" | "steady" | "stepped";
+            module?: components["schemas"]["Module"];
+            /** @description Coldest temperature on record at the site, for the caution; null: not known. Unit: degC. */
+            recordLowTemperature?: number | null;
+        };
+        /** @description The totals of one group. */
+        PortfolioGroupTotals: {
+            group: string;
+            labels: components["schemas"]["PortfolioLabelTotals"][];
+        };
+        /** @description One line of a portfolio's request. */
+        PortfolioInputLine: components["schemas"]["PortfolioDefaults"] | components["schemas"]["PortfolioClimate"] | components["schemas"]["PortfolioSite"];
+        /** @description One candidate over many sites, each times its count. */
+        PortfolioLabelTotals: {
+            /** @description What the arrays could have given. Unit: kWh. */
+            available: number;
+            /** @description What the candidate took. Unit: kWh. */
+            delivered: number;
+            label: string;
+            /** @description What it left. Unit: kWh. */
+            lost: number;
+            lostByCause: components["schemas"]["LostByCause"];
+            /** @description Lost over available; null when nothing was available. Unit: 1. */
+            lostFraction: number | null;
+            /** @description Lost by this candidate everywhere instead of each site's own best. Unit: kWh. */
+            regret: number;
+            /** @description Sites that had this candidate, each times its count. Unit: 1. */
+            sites: number;
+        };
+        /** @description One line of a portfolio's answer; kinds may be added. Empty lines only keep the connection open. */
+        PortfolioOutputLine: components["schemas"]["PortfolioResult"] | components["schemas"]["PortfolioSiteProblem"] | components["schemas"]["PortfolioAborted"] | components["schemas"]["PortfolioTotals"];
+        /** @description What the candidates come to at one site. Lines come as sites are done. */
+        PortfolioResult: {
+            /** @description Label of the candidate the others are compared with. */
+            baseline: string;
+            cautions: components["schemas"]["Caution"][];
+            /** @description How often the totals count the site. Unit: 1. */
+            count: number;
+            coverage: components["schemas"]["Coverage"];
+            group: string | null;
+            id: string;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "result";
+            /** @description steady or stepped. */
+            mode: string;
+            /** @description Of one such site, in the order of the candidates. */
+            results: components["schemas"]["PortfolioCandidate"][];
+            /** @description Why no worth per year can be said; null when it can. */
+            worthReason: string | null;
+        };
+        /** @description One site. With what it has from the defaults it needs a module, candidates and a climate, and is then compared as by `compare`. */
+        PortfolioSite: {
+            array?: components["schemas"]["ArrayLayout"];
+            /**
+             * @description Label of the candidate the others are compared with; left out: the first.
+             * @example hold a fraction
+             */
+            baseline?: string;
+            /** @description 2 to 24 rules on converters; `converter` above holds for those without their own. */
+            candidates?: components["schemas"]["Candidate"][];
+            /** @description The climate itself, or the name of one given by a line above. */
+            climate?: components["schemas"]["Climate"] | components["schemas"]["NamedClimate"];
+            converter?: components["schemas"]["Converter"];
+            /** @description How many such sites there are: the totals count it as often. 1 when left out. Unit: 1. */
+            count?: number;
+            energyValue?: components["schemas"]["EnergyValue"];
+            /**
+             * @description Group whose totals the site is added to besides the whole.
+             * @example north
+             */
+            group?: string;
+            /**
+             * @description Of the site in its answer; each id once.
+             * @example Heron Bank
+             */
+            id: string;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "site";
+            /**
+             * @description steady: each sample at rest. stepped: every rule at its own control period. auto: stepped up to a step of 300 s, steady above; the answer says which and why.
+             * @enum {string}
+             */
+            mode?: "auto" | "steady" | "stepped";
+            module?: components["schemas"]["Module"];
+            /** @description Coldest temperature on record at the site, for the caution; null: not known. Unit: degC. */
+            recordLowTemperature?: number | null;
+        };
+        /** @description Why a line got no result; the others are not touched. Its pointers lead into the line as it is with the defaults. A climate line that is refused gets one too, with no id; the totals do not count it, and each site that names it is refused. */
+        PortfolioSiteProblem: {
+            /** @description Null where the line has none that will do. */
+            id: string | null;
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "site-problem";
+            /** @description Of the request, from 1; empty lines count. Unit: 1. */
+            line: number;
+            problem: components["schemas"]["Problem"];
+        };
+        /** @description What the portfolio comes to, in any order of its sites; the last line. Without it the answer was cut. */
+        PortfolioTotals: {
+            /** @description Result lines above. Unit: 1. */
+            answered: number;
+            /** @description Label that delivers most of those at every answered site; null: there is none. */
+            best: string | null;
+            /** @description In the order of their names; sites without a group are only in the whole. */
+            groups: components["schemas"]["PortfolioGroupTotals"][];
+            /**
+             * @description discriminator enum property added by openapi-typescript
+             * @enum {string}
+             */
+            kind: "totals";
+            /** @description By label, in the order of their names. */
+            labels: components["schemas"]["PortfolioLabelTotals"][];
+            /** @description Sites with a problem in place of a result. Unit: 1. */
+            refused: number;
+            /** @description Lines that were meant as sites: answered and refused ones. Unit: 1. */
+            sites: number;
+            /** @description Of the service that computed the answer. */
+            version: string;
+            /** @description The 20 sites that lose most under their baseline, the largest loss first. */
+            worst: components["schemas"]["PortfolioWorstSite"][];
+        };
+        /** @description A site that loses much under its baseline. */
+        PortfolioWorstSite: {
+            id: string;
+            /** @description The site's baseline. */
+            label: string;
+            /** @description Lost under it, times the site's count. Unit: kWh. */
+            lost: number;
+            /** @description Lost over available; null when nothing was available. Unit: 1. */
+            lostFraction: number | null;
         };
         /**
          * Power curve scan
@@ -1845,11 +2096,25 @@ export type ModuleFitAnswer = components['schemas']['ModuleFitAnswer'];
 export type ModuleFitRequest = components['schemas']['ModuleFitRequest'];
 export type ModuleToFit = components['schemas']['ModuleToFit'];
 export type Month = components['schemas']['Month'];
+export type NamedClimate = components['schemas']['NamedClimate'];
 export type NoctModel = components['schemas']['NoctModel'];
 export type PerfectRule = components['schemas']['PerfectRule'];
 export type PerturbAndObserveRule = components['schemas']['PerturbAndObserveRule'];
 export type PlaneOfArrayIrradiance = components['schemas']['PlaneOfArrayIrradiance'];
 export type PointTrace = components['schemas']['PointTrace'];
+export type PortfolioAborted = components['schemas']['PortfolioAborted'];
+export type PortfolioCandidate = components['schemas']['PortfolioCandidate'];
+export type PortfolioClimate = components['schemas']['PortfolioClimate'];
+export type PortfolioDefaults = components['schemas']['PortfolioDefaults'];
+export type PortfolioGroupTotals = components['schemas']['PortfolioGroupTotals'];
+export type PortfolioInputLine = components['schemas']['PortfolioInputLine'];
+export type PortfolioLabelTotals = components['schemas']['PortfolioLabelTotals'];
+export type PortfolioOutputLine = components['schemas']['PortfolioOutputLine'];
+export type PortfolioResult = components['schemas']['PortfolioResult'];
+export type PortfolioSite = components['schemas']['PortfolioSite'];
+export type PortfolioSiteProblem = components['schemas']['PortfolioSiteProblem'];
+export type PortfolioTotals = components['schemas']['PortfolioTotals'];
+export type PortfolioWorstSite = components['schemas']['PortfolioWorstSite'];
 export type PowerCurveScanRule = components['schemas']['PowerCurveScanRule'];
 export type Problem = components['schemas']['Problem'];
 export type ProblemError = components['schemas']['ProblemError'];
@@ -1950,7 +2215,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -2030,7 +2295,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -2116,7 +2381,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -2506,7 +2771,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -2526,7 +2791,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, or of 16777216 for a line of a portfolio, decompressed. */
             413: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -2536,7 +2801,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, or application/x-ndjson for a portfolio, plain or gzip. */
             415: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -2811,7 +3076,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -2831,7 +3096,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, or of 16777216 for a line of a portfolio, decompressed. */
             413: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -2841,7 +3106,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, or application/x-ndjson for a portfolio, plain or gzip. */
             415: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -3141,7 +3406,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -3161,7 +3426,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, or of 16777216 for a line of a portfolio, decompressed. */
             413: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -3171,7 +3436,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, or application/x-ndjson for a portfolio, plain or gzip. */
             415: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -3610,7 +3875,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -3630,7 +3895,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, or of 16777216 for a line of a portfolio, decompressed. */
             413: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -3640,7 +3905,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, or application/x-ndjson for a portfolio, plain or gzip. */
             415: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -3810,7 +4075,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -3830,7 +4095,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, or of 16777216 for a line of a portfolio, decompressed. */
             413: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -3840,7 +4105,154 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, or application/x-ndjson for a portfolio, plain or gzip. */
+            415: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-request`: Schema, relations or physics; every error says where and what would be right. `too-much-work`: Refused before starting, with the estimate and the limit. `time-limit-exceeded`: Stopped at the limit of computing time; the same request would end the same. */
+            422: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `headers-too-large`: Request line and headers exceed 16 KiB. */
+            431: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal`: A defect of the service; the request id finds it in the log. `worker-lost`: The worker died or ran out of memory with this request; do not simply retry. */
+            500: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `overloaded`: The queue is full; nothing was begun. Retry after the time that Retry-After says. `draining`: Nothing was begun; another replica, or this one after its restart, will answer. */
+            503: {
+                headers: {
+                    "retry-after": components["headers"]["RetryAfter"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    portfolio: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description An id of the caller's for log and answer; one that does not match the pattern is replaced. */
+                "x-request-id"?: components["parameters"]["RequestId"];
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {"kind":"defaults","module":{"kind":"datasheet","cellsInSeries":60,"shortCircuitCurrent":9.91,"openCircuitVoltage":38.9,"maximumPowerCurrent":9.36,"maximumPowerVoltage":31.8,"shortCircuitCurrentCoefficient":0.05,"openCircuitVoltageCoefficient":-0.29},"candidates":[{"label":"one voltage","rule":{"kind":"constant-voltage","setVoltagePerModule":29},"price":120},{"label":"climbs","rule":{"kind":"perturb-and-observe","stepFraction":0.005},"price":180}],"baseline":"one voltage"}
+                 *     {"kind":"climate","name":"south shore","climate":{"start":"2025-04-12T00:00:00+02:00","step":10800,"irradiance":{"kind":"plane-of-array","values":[0,0,120,560,810,470,60,0]},"temperature":{"kind":"ambient","values":[4.1,3.6,7.2,11.8,14.9,14.1,9.3,6]}}}
+                 *     {"kind":"site","id":"Heron Bank","climate":{"kind":"named","name":"south shore"}}
+                 *     {"kind":"site","id":"Old Groyne","climate":{"kind":"named","name":"south shore"},"count":3,"group":"groynes"}
+                 */
+                "application/x-ndjson": string;
+            };
+        };
+        responses: {
+            /** @description One line for each site, and the totals. */
+            200: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/x-ndjson": string;
+                };
+            };
+            /** @description `malformed-request`: The HTTP parser could not read the request. `malformed-body`: Not UTF-8, not JSON, nested too deep, or not gzip. */
+            400: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unauthorized`: No key, or none that is known. */
+            401: {
+                headers: {
+                    "www-authenticate": components["headers"]["WwwAuthenticate"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `method-not-allowed`: The Allow header names those that do. */
+            405: {
+                headers: {
+                    allow: components["headers"]["Allow"];
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
+            406: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-slow`: No byte of it arrived for a while, or it took too long as a whole. */
+            408: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, or of 16777216 for a line of a portfolio, decompressed. */
+            413: {
+                headers: {
+                    "x-request-id": components["headers"]["RequestId"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, or application/x-ndjson for a portfolio, plain or gzip. */
             415: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -3947,7 +4359,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -4365,7 +4777,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -4385,7 +4797,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, decompressed. */
+            /** @description `body-too-large`: Above the limit of at most 67108864 bytes, or of 16777216 for a line of a portfolio, decompressed. */
             413: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -4395,7 +4807,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, plain or gzip. */
+            /** @description `unsupported-media-type`: The body must be application/json in UTF-8, or application/x-ndjson for a portfolio, plain or gzip. */
             415: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];
@@ -4476,7 +4888,11 @@ export interface operations {
                      *         "samples": 600000,
                      *         "candidates": 24,
                      *         "controlPeriods": 200000000,
-                     *         "computeSeconds": 50
+                     *         "computeSeconds": 50,
+                     *         "lineBytes": 16777216,
+                     *         "sites": 100000,
+                     *         "namedClimates": 64,
+                     *         "namedClimateBytes": 67108864
                      *       }
                      *     }
                      */
@@ -4504,7 +4920,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-acceptable`: The Accept header rules out application/json. */
+            /** @description `not-acceptable`: The Accept header rules out application/json, or application/x-ndjson for a portfolio. */
             406: {
                 headers: {
                     "x-request-id": components["headers"]["RequestId"];

@@ -14,16 +14,14 @@ import { ArraySchema } from "./array.ts";
 import { ClimateSchema } from "./climate.ts";
 import { ConverterSchema } from "./converter.ts";
 import { ModuleSchema } from "./module.ts";
+import { name } from "./name.ts";
 import { quantity, reported, reportedOrNull } from "./quantity.ts";
 import { ModeSchema, RecordLowSchema } from "./request-parts.ts";
 import { ResolvedRuleSchema, RuleSchema } from "./rule.ts";
 
-/** 1 to 100 characters without control characters: a pattern, since JSON Schema counts characters and JavaScript halves. */
-const LABEL = /^\P{Cc}{1,100}$/u;
 const CURRENCY = /^[A-Z]{3}$/;
 
-const labelOf = (description: string) =>
-  z.string().regex(LABEL).openapi({ pattern: LABEL.source, description, example: "hold a fraction" });
+const labelOf = (description: string) => name(description, "hold a fraction");
 
 /** One rule on one converter under a name. */
 export const CandidateSchema = z
@@ -56,16 +54,22 @@ export const EnergyValueSchema = z
   })
   .openapi("EnergyValue", { description: "What a kilowatt-hour is worth." });
 
+/** What is compared. */
+export const CandidatesSchema = z.array(CandidateSchema).min(2).max(CEILINGS.candidates).openapi({
+  description: "2 to 24 rules on converters; `converter` above holds for those without their own.",
+});
+
+/** What the others are compared with. */
+export const BaselineSchema = labelOf("Label of the candidate the others are compared with; left out: the first.");
+
 /** The body of POST /v1/comparisons. */
 export const ComparisonRequestSchema = z
   .strictObject({
     module: ModuleSchema,
     array: ArraySchema.optional(),
     converter: ConverterSchema.optional(),
-    candidates: z.array(CandidateSchema).min(2).max(CEILINGS.candidates).openapi({
-      description: "2 to 24 rules on converters; `converter` above holds for those without their own.",
-    }),
-    baseline: labelOf("Label of the candidate the others are compared with; left out: the first.").optional(),
+    candidates: CandidatesSchema,
+    baseline: BaselineSchema.optional(),
     climate: ClimateSchema,
     mode: ModeSchema,
     energyValue: EnergyValueSchema.optional(),
