@@ -25,7 +25,7 @@ async function demo(): Promise<void> {
     say(table(rows));
     say(`\nA better converter (perturb & observe in place of constant voltage) is worth most at:\n${worth(rows, 3)}`);
     const cautions = new Map(rows.flatMap(({ answer }) => answer.cautions.map((caution) => [caution.code, caution])));
-    say("\nCautions that came with the answers:");
+    say("\nCautions that came with the answers (each with the figures of the last site that raised it):");
     for (const { severity, detail } of cautions.values()) say(`- ${severity}: ${detail}`);
   } finally {
     await client.close();

@@ -31,7 +31,8 @@ export function table(rows: readonly StageAnswer[]): string {
   const line = (cells: string[]): string =>
     cells
       .map((cell, k) => (k < 2 || k === cells.length - 1 ? cell.padEnd(widths[k]) : cell.padStart(widths[k])))
-      .join("  ");
+      .join("  ")
+      .trimEnd();
   return [line(head), widths.map((width) => "-".repeat(width)).join("  "), ...body.map(line)].join("\n");
 }
 
