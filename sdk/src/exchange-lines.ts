@@ -9,6 +9,7 @@ import { LineSplitter } from "./line-splitter.ts";
 import type { Operation } from "./operation.ts";
 import { checkMediaType, errorOf, headerField } from "./read-answer.ts";
 import { readBody } from "./read-body.ts";
+import { SilenceWatch } from "./silence-watch.ts";
 
 /** One request whose answer is lines. */
 export interface LineRequest {
@@ -32,21 +33,30 @@ export interface LineRequest {
  */
 export async function exchangeLines(pool: Pool, request: LineRequest, context: CallContext): Promise<void> {
   const { message, signal, silence } = request;
+  const watch = new SilenceWatch(silence, signal);
   let answer: Dispatcher.ResponseData | null = null;
   try {
-    answer = await pool.request({ ...message, signal, headersTimeout: silence, bodyTimeout: silence });
+    answer = await pool.request({ ...message, signal: watch.signal });
     const requestId = headerField(answer, "x-request-id") ?? context.requestId;
-    await readLines(answer, request, { ...context, requestId });
+    await readLines(answer, request, { ...context, requestId }, watch);
   } catch (cause) {
     answer?.body.on("error", ignoreOwnDestroy).destroy();
-    throw signal.aborted ? signal.reason : exchangeFault(cause, answer !== null, context);
+    if (signal.aborted) throw signal.reason;
+    throw exchangeFault(watch.signal.aborted ? watch.signal.reason : cause, answer !== null, context);
+  } finally {
+    watch.release();
   }
 }
 
 /** Destroying a body before its end makes it emit the error of our own doing. */
 function ignoreOwnDestroy(): void {}
 
-async function readLines(answer: Dispatcher.ResponseData, request: LineRequest, context: CallContext): Promise<void> {
+async function readLines(
+  answer: Dispatcher.ResponseData,
+  request: LineRequest,
+  context: CallContext,
+  watch: SilenceWatch,
+): Promise<void> {
   const { statusCode: status, headers, body } = answer;
   const { operation, maximumBytes } = request;
   if (!operation.successStatuses.includes(status)) {
@@ -55,9 +65,11 @@ async function readLines(answer: Dispatcher.ResponseData, request: LineRequest, 
     throw errorOf({ status, headers, bytes }, context);
   }
   checkMediaType(operation, { status, headers }, context);
+  watch.refresh();
   const splitter = new LineSplitter();
   let length = 0;
   for await (const chunk of body as AsyncIterable<Uint8Array>) {
+    watch.refresh();
     length += chunk.length;
     if (length > maximumBytes) throw new AnswerTooLargeError(maximumBytes, context);
     for (const line of decoded(splitter, chunk, context)) request.onLine(parse(line, context), context);

@@ -1,34 +1,28 @@
 import { setTimeout as wait } from "node:timers/promises";
 import { afterEach, describe, expect, it } from "vitest";
 import type { Climate } from "../../sdk/src/generated/schema.ts";
-import type { PortfolioSiteRequest } from "../../sdk/src/portfolio/portfolio-lines.ts";
 import type { PortfolioProgress } from "../../sdk/src/portfolio/portfolio-options.ts";
-import { clientOf } from "./fixtures/client-of.ts";
-import type { Treatment } from "./fixtures/portfolio-server.ts";
-import { answerTo, begin, startPortfolioServer, totals } from "./fixtures/portfolio-server.ts";
+import { answerTo, begin, totals } from "./fixtures/portfolio-server.ts";
 import { REQUEST } from "./fixtures/requests.ts";
+import { openPortfolios, stages } from "./fixtures/run-portfolio.ts";
 
 const opened: { close(): Promise<void> }[] = [];
 afterEach(async () => {
   for (const item of opened.splice(0)) await item.close();
 });
 
-async function open(treat?: Treatment, options?: Parameters<typeof clientOf>[1]) {
-  const server = await startPortfolioServer(treat);
-  const { client } = clientOf(server, options);
-  opened.push(client, server);
-  return { server, client };
+async function open(...parameters: Parameters<typeof openPortfolios>) {
+  const bench = await openPortfolios(...parameters);
+  opened.push(bench);
+  return bench;
 }
-
-const sites = (count: number): PortfolioSiteRequest[] =>
-  Array.from({ length: count }, (_, index) => ({ id: `stage ${index}` }));
 
 /** A sequence that counts how far it was taken and whether it was let go. */
 function counted(count: number) {
   const state = { taken: 0, closed: false };
   function* generate() {
     try {
-      for (const site of sites(count)) {
+      for (const site of stages(count)) {
         state.taken += 1;
         yield site;
       }
@@ -49,7 +43,7 @@ describe("a portfolio's requests", () => {
     const { client, server } = await open();
     const candidates = [{ label: "held", rule: { kind: "constant-voltage" as const } }];
     const options = { defaults: { candidates }, requestId: "night-run", concurrency: 1 };
-    for await (const _ of client.portfolio(sites(130), options));
+    for await (const _ of client.portfolio(stages(130), options));
     expect(server.asked.map((asked) => asked.sites.length)).toEqual([64, 64, 2]);
     expect(server.asked.map(({ headers }) => headers["x-request-id"])).toEqual([
       "night-run.1",
@@ -67,7 +61,7 @@ describe("a portfolio's requests", () => {
   it("are filled to the bytes allowed, and a larger site goes alone", async () => {
     const { client, server } = await open();
     const large = { id: "large", climate: climateOf(Array.from({ length: 400 }, () => 100)) };
-    const list = [...sites(40), large, ...sites(80).slice(40)];
+    const list = [...stages(40), large, ...stages(80).slice(40)];
     for await (const _ of client.portfolio(list, { batchBytes: 1000, concurrency: 1 }));
     expect(server.asked.flatMap((asked) => asked.sites.map(({ id }) => id))).toEqual(list.map(({ id }) => id));
     for (const { bytes, sites: held } of server.asked) {
@@ -81,7 +75,7 @@ describe("a portfolio's requests", () => {
     const { client, server } = await open();
     const names = ["fjord", "lagoon", "desert lake"];
     const climates = Object.fromEntries(names.map((name, index) => [name, climateOf(Float64Array.of(index, 5))]));
-    const list = sites(9).map((site, index) => {
+    const list = stages(9).map((site, index) => {
       return { ...site, climate: { kind: "named" as const, name: names[Math.floor(index / 4)] } };
     });
     for await (const _ of client.portfolio(list, { climates, batchSites: 4, concurrency: 1 }));
@@ -123,7 +117,7 @@ describe("a portfolio's requests", () => {
       now -= 1;
       return false;
     });
-    for await (const _ of client.portfolio(sites(90), { batchSites: 10, concurrency: 3 }));
+    for await (const _ of client.portfolio(stages(90), { batchSites: 10, concurrency: 3 }));
     expect(most).toBe(3);
   });
 
@@ -134,7 +128,7 @@ describe("a portfolio's requests", () => {
       answered = resolve;
     });
     async function* slow() {
-      yield* sites(2);
+      yield* stages(2);
       await firstAnswer;
       yield { id: "after the first answer" };
     }
@@ -177,7 +171,7 @@ describe("a portfolio's loop", () => {
       return true;
     });
     const ids: string[] = [];
-    for await (const { id } of client.portfolio(sites(2))) {
+    for await (const { id } of client.portfolio(stages(2))) {
       ids.push(id);
       go();
     }
@@ -226,7 +220,7 @@ describe("a portfolio's loop", () => {
 
   it("can be had once", async () => {
     const { client } = await open();
-    const run = client.portfolio(sites(1));
+    const run = client.portfolio(stages(1));
     for await (const _ of run);
     expect(() => run[Symbol.asyncIterator]()).toThrow(TypeError);
   });
@@ -250,7 +244,7 @@ describe("a portfolio's loop", () => {
       response.end(totals([], turn === 1 ? "1.3.0" : "1.2.9"));
       return true;
     });
-    const run = client.portfolio(sites(2), { batchSites: 1 });
+    const run = client.portfolio(stages(2), { batchSites: 1 });
     for await (const _ of run);
     expect(run.totals().versions).toEqual(["1.2.9", "1.3.0"]);
   });
@@ -260,7 +254,7 @@ describe("a portfolio's loop", () => {
       begin(response).end(`{"kind":"news"}\n${JSON.stringify(answerTo(asked.sites[0]))}\n${totals([])}`);
       return true;
     });
-    for await (const line of client.portfolio(sites(1))) expect(line).toMatchObject({ kind: "result", id: "stage 0" });
+    for await (const line of client.portfolio(stages(1))) expect(line).toMatchObject({ kind: "result", id: "stage 0" });
   });
 });
 

@@ -23,17 +23,20 @@ describe("SeenIds", () => {
     }
   });
 
-  it("holds at most 60 bytes an id, however long", () => {
+  it("holds at most 60 bytes an id, however long", async () => {
     const held = () => {
       collectGarbage();
       return process.memoryUsage().arrayBuffers;
     };
+    const count = 200_000;
     const long = "x".repeat(1000);
     const before = held();
     const seen = new SeenIds();
-    for (let index = 0; index < 200_000; index += 1) seen.add(`${long}${index}`, index);
-    expect(held() - before).toBeLessThan(200_000 * 60);
-    expect(held() - before).toBeGreaterThan(200_000 * 20);
-    expect(seen.add(`${long}0`, 200_000)).toBe(0);
+    for (let index = 0; index < count; index += 1) seen.add(`${long}${index}`, index);
+    // The collector frees what digests and outgrown tables held in its own time.
+    await expect.poll(() => held() - before, { timeout: 5000 }).toBeLessThan(60 * count);
+    // This is where they are held at all.
+    expect(held() - before).toBeGreaterThan(10 * count);
+    expect(seen.add(`${long}0`, count)).toBe(0);
   });
 });

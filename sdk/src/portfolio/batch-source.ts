@@ -34,7 +34,7 @@ const PATIENCE = 100;
 export class BatchSource {
   readonly #sites: Iterator<PortfolioSiteRequest> | AsyncIterator<PortfolioSiteRequest>;
   readonly #shared: SharedParts;
-  readonly #bounds: BatchBounds;
+  #bounds: BatchBounds;
   readonly #context: CallContext;
   readonly #seen = new SeenIds();
   #taken = 0;
@@ -59,6 +59,11 @@ export class BatchSource {
   /** How many sites were taken. */
   get taken(): number {
     return this.#taken;
+  }
+
+  /** Fills the batches that follow up to no more than `bytes`. */
+  narrow(bytes: number): void {
+    this.#bounds = { ...this.#bounds, bytes: Math.min(this.#bounds.bytes, bytes) };
   }
 
   /**

@@ -113,6 +113,7 @@ export class BatchedPortfolio<C extends ColumnKind> implements PortfolioRun<C> {
     const climates = new ClimateLines(this.#settings.climates, context);
     const bounds = { sites: batchSites, bytes: batchBytes - (defaultsLine?.length ?? 0) };
     const shared = { climates, climate: namedClimate(defaults ?? {}) };
+    const source = new BatchSource(this.#sites, shared, bounds, context);
     const port = {
       compose: (sites) => composeRequest(sites, defaultsLine, climates),
       send: (body, onLine, of) => {
@@ -124,9 +125,10 @@ export class BatchedPortfolio<C extends ColumnKind> implements PortfolioRun<C> {
       timeout,
       signal: this.#controller.signal,
       answeredAnywhere: () => this.#arrived,
+      onTooLarge: (bytes) => source.narrow(bytes / 2 - (defaultsLine?.length ?? 0)),
       onVersion: (version) => this.#merger.seeVersion(version),
     } satisfies Omit<BatchPort, "onAnswer">;
-    return { source: new BatchSource(this.#sites, shared, bounds, context), port };
+    return { source, port };
   }
 
   #handOver({ line, context }: Arrival): PortfolioLine<C> {
