@@ -19,7 +19,10 @@ module.exports = {
       name: "rules-do-not-know-each-other",
       severity: "error",
       from: { path: "^service/core/rules/", pathNot: "^service/core/rules/index.ts$" },
-      to: { path: "^service/core/rules/", pathNot: "^service/core/rules/(rule|climb-by-power|sampling-parameters).ts$" },
+      to: {
+        path: "^service/core/rules/",
+        pathNot: "^service/core/rules/(rule|climb-by-power|sampling-parameters).ts$",
+      },
     },
     only("climate-imports-core", "^service/climate/", "^service/(climate|core)/"),
     only("studies-import-core-and-climate", "^service/studies/", "^service/(studies|climate|core)/"),

@@ -55,6 +55,14 @@ describe("the configuration", () => {
 
   it("lowers limits and never raises them", () => {
     expect(readConfig({ KNEEGAP_MAX_SAMPLES: "9000" }).limits.samples).toBe(9000);
+    const portfolios = {
+      KNEEGAP_MAX_LINE_BYTES: "1000",
+      KNEEGAP_MAX_SITES: "20",
+      KNEEGAP_MAX_NAMED_CLIMATES: "3",
+      KNEEGAP_MAX_NAMED_CLIMATE_BYTES: "4000",
+    };
+    const lowered = { lineBytes: 1000, sites: 20, namedClimates: 3, namedClimateBytes: 4000 };
+    expect(readConfig(portfolios).limits).toMatchObject(lowered);
     expect(() => readConfig({ KNEEGAP_MAX_SAMPLES: "600001" })).toThrow(/KNEEGAP_MAX_SAMPLES/);
     expect(() => readConfig({ KNEEGAP_MAX_CANDIDATES: "1" })).toThrow(/KNEEGAP_MAX_CANDIDATES/);
   });
