@@ -3,6 +3,7 @@ import { arch, cpus } from "node:os";
 import { costAgainstLength, maximumPowerAgainstC, maximumPowerAgainstNumpy, steppingAgainstC } from "./kernels.ts";
 import type { Row } from "./measure.ts";
 import { describeRow } from "./measure.ts";
+import { measurePortfolios } from "./portfolio.ts";
 import { estimateAgainstAnalyst, horizontalAgainstPlane } from "./service.ts";
 
 const PARTS: (() => Row[] | Promise<Row[]>)[] = [
@@ -14,8 +15,9 @@ const PARTS: (() => Row[] | Promise<Row[]>)[] = [
   horizontalAgainstPlane,
 ];
 
-/** Prints the table of ratios; `--json` the figures; `--save` refreshes RESULTS.md beside this file. Never fails on a time. */
+/** Prints the table of ratios; `--json` the figures; `--save` refreshes RESULTS.md beside this file; `--portfolio` measures portfolios instead. Never fails on a time. */
 async function main(): Promise<void> {
+  if (process.argv.includes("--portfolio")) return measurePortfolios();
   const rows: Row[] = [];
   const lines = [
     "| # | work | peer | goal | ours / peer (median, spread) | ours (median) |",

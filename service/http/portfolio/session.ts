@@ -1,3 +1,4 @@
+import { setMaxListeners } from "node:events";
 import type { Readable } from "node:stream";
 import type { Limits } from "../../wire/limits.ts";
 import type { Errand, Line, Portfolio } from "../../wire/portfolio/portfolio.ts";
@@ -42,6 +43,8 @@ export class PortfolioSession {
     this.parts = parts;
     const { silence, stallTime } = parts.service;
     this.stall = setTimeout(() => this.onStall(), stallTime);
+    // One a step.
+    setMaxListeners(0, this.left.signal);
     this.output = createLineOutput(silence, {
       onCaughtUp: () => this.stall.refresh(),
       onLeft: () => this.leave(),

@@ -60,23 +60,35 @@ interface Member {
 
 /** The members of the line's object, in their order. */
 function* topMembers(line: Uint8Array): Generator<Member> {
-  let depth = 0;
   let string = { from: 0, to: 0 };
   let open: { name: string | null; from: number } | null = null;
-  for (let i = 0; i < line.length; i++) {
+  for (let i = line.indexOf(OPEN_OBJECT) + 1; i < line.length; i++) {
     const byte = line[i];
     if (byte === QUOTE) {
-      const end = endOfString(line, i);
-      string = { from: i, to: end };
-      i = end - 1;
-    } else if (byte === OPEN_OBJECT || byte === OPEN_ARRAY) depth++;
-    else if (byte === COLON && depth === 1) open = { name: nameAt(line, string), from: i + 1 };
-    else if (byte === CLOSE_OBJECT || byte === CLOSE_ARRAY || (byte === COMMA && depth === 1)) {
-      if (depth === 1 && open !== null) yield { ...open, to: i };
-      if (depth === 1) open = null;
-      if (byte !== COMMA) depth--;
+      const to = endOfString(line, i);
+      string = { from: i, to };
+      i = to - 1;
+    } else if (byte === OPEN_OBJECT || byte === OPEN_ARRAY) i = endOfNested(line, i);
+    else if (byte === COLON) open = { name: nameAt(line, string), from: i + 1 };
+    else if (byte === COMMA || byte === CLOSE_OBJECT) {
+      if (open !== null) yield { ...open, to: i };
+      open = null;
     }
   }
+}
+
+/** Where the object or array that begins at `start` ends; the end of the line where it does not. */
+function endOfNested(line: Uint8Array, start: number): number {
+  let depth = 0;
+  for (let at = start; at < line.length; at++) {
+    const byte = line[at];
+    // Below the first bracket lie the digits, signs, commas and spaces that columns are made of.
+    if (byte < OPEN_ARRAY && byte !== QUOTE) continue;
+    if (byte === QUOTE) at = endOfString(line, at) - 1;
+    else if (byte === OPEN_ARRAY || byte === OPEN_OBJECT) depth++;
+    else if ((byte === CLOSE_ARRAY || byte === CLOSE_OBJECT) && --depth === 0) return at;
+  }
+  return line.length;
 }
 
 /** One past the quote that ends the string which begins at `start`. */
