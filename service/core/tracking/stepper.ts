@@ -6,28 +6,24 @@ import type { OperatingPoint } from "../diode/maximum-power.ts";
 import { maximumPower } from "../diode/maximum-power.ts";
 import type { Seen } from "../rules/rule.ts";
 import { climbOn, firstSight } from "./climber.ts";
+import type { SteppingKind } from "./followed.ts";
+import { FOLLOWED, FOLLOWED_COUNT, followedTolerances, tallyFollowed } from "./followed.ts";
 import type { Periods } from "./period-grid.ts";
 import { PeriodGrid } from "./period-grid.ts";
 import { SampleClock } from "./sample-clock.ts";
-import { followsFresh, isSmooth } from "./smoothness.ts";
+import { isSmooth } from "./smoothness.ts";
 import type { Contender } from "./steady.ts";
 import type { Piece, Stretch } from "./stretch.ts";
 import { enterPiece, temperatureAt } from "./stretch.ts";
 import type { Tally } from "./tally.ts";
-import { emptyTally, stretchExtremes, tallyPoint } from "./tally.ts";
+import { emptyTally, tallyPoint } from "./tally.ts";
 import { readSample, targetVoltage } from "./target.ts";
 import { Terminals } from "./terminals.ts";
 import type { Place, Run, TimedWeather } from "./weather-path.ts";
 import { locate, valueAt } from "./weather-path.ts";
 
-/** Values a stepper wants as cubics: see `Followed`. */
-export const FOLLOWED = { available: 0, clipped: 1, best: 2, fresh: 3, power: 4, voltage: 5, current: 6 } as const;
-export const FOLLOWED_COUNT = 7;
 /** `perfect` has no period of its own: its energy is summed as finely as this, s. */
 const PERFECT_PERIOD = 1;
-/** Largest error of a followed power, of the maximum power. */
-const POWER = 3e-8;
-
 /**
  * One rule on its own clock. Each period is evaluated once, at its middle: that power counts for the whole period and
  * is what the rule sees next. State is a handful of numbers; nothing grows with the periods.
@@ -39,6 +35,7 @@ export class Stepper {
   /** Whether the operating point follows the weather smoothly, so that no period need be stepped one by one. */
   readonly smooth: boolean;
   readonly tolerances: readonly number[];
+  private readonly kind: SteppingKind;
   /** A pilot cell stepped period by period: what it holds is always fresh. */
   private readonly holdsFresh: boolean;
   private readonly array: PhotovoltaicArray;
@@ -72,8 +69,8 @@ export class Stepper {
     const sampling = rule.behaviour === "perfect" ? null : rule.sampling;
     this.clock = sampling === null ? null : new SampleClock(sampling, converter, array, weather);
     this.holdsFresh = !this.smooth && sampling !== null && sampling.pilot;
-    const fresh = followsFresh(contender) ? POWER : 0;
-    this.tolerances = [POWER, POWER, POWER, fresh, this.smooth ? POWER : 0, 0, 0];
+    this.kind = { behaviour: rule.behaviour, smooth: this.smooth, holdsFresh: this.holdsFresh };
+    this.tolerances = followedTolerances(contender);
   }
 
   /** Writes what the stepper follows of a condition (see `FOLLOWED`). */
@@ -120,7 +117,7 @@ export class Stepper {
   stepAlong(stretch: Stretch, piece: Piece, run: Run, periods: Periods, base: number): void {
     const count = periods.end - periods.first;
     if (count <= 0) return;
-    this.sumSmooth(stretch, periods, base);
+    tallyFollowed(this.tally, stretch, { grid: this.grid, periods, base }, this.kind);
     if (this.smooth) return;
     const { circuit } = this.condition;
     for (let k = periods.first; k < periods.end; k++) {
@@ -138,44 +135,6 @@ export class Stepper {
       const wakePower = this.contender.converter.wakePower;
       const idle = wakePower > 0 && stretch.followedAt(base + FOLLOWED.available, time) < wakePower;
       this.stepPeriod(k, run, idle);
-    }
-  }
-
-  /** What is smooth along a stretch, summed over its periods without stepping them. */
-  private sumSmooth(stretch: Stretch, periods: Periods, base: number): void {
-    const { tally, grid } = this;
-    const count = periods.end - periods.first;
-    const times = { first: grid.middleOf(periods.first), spacing: grid.period, count };
-    const lastMiddle = grid.middleOf(periods.end - 1);
-    const cut = 1 - grid.weightOf(periods.end - 1);
-    const sum = (index: number): number => {
-      const whole = stretch.sumFollowed(base + index, times);
-      return cut > 0 ? whole - cut * stretch.followedAt(base + index, lastMiddle) : whole;
-    };
-    for (const q of [0, 1, 2] as const) {
-      const whole = stretch.sumMaximum(q, times);
-      tally.maximum[q] += cut > 0 ? whole - cut * stretch.maximumAt(q, lastMiddle) : whole;
-    }
-    tally.sunlit += count - cut;
-    tally.available += sum(FOLLOWED.available);
-    tally.clipped += sum(FOLLOWED.clipped);
-    const best = sum(FOLLOWED.best);
-    tally.best += best;
-    const { rule } = this.contender;
-    const fresh = rule.behaviour === "target" ? sum(FOLLOWED.fresh) : best;
-    if (!this.holdsFresh) tally.fresh += fresh;
-    if (rule.behaviour === "climb") tally.held += best;
-    if (!this.smooth) return;
-    tally.held += fresh;
-    tally.operating += rule.behaviour === "perfect" ? best : sum(FOLLOWED.power);
-    tally.voltage += sum(FOLLOWED.voltage);
-    tally.current += sum(FOLLOWED.current);
-    tally.lit += count - cut;
-    if (!tally.keepsExtremes) return;
-    for (let k = periods.first; k < periods.end; k++) {
-      const time = grid.middleOf(k);
-      const voltage = stretch.followedAt(base + FOLLOWED.voltage, time);
-      stretchExtremes(tally, voltage, stretch.followedAt(base + FOLLOWED.power, time));
     }
   }
 
