@@ -3,7 +3,7 @@ import type { Circuit } from "../diode/circuit.ts";
 import { emptyCircuit } from "../diode/circuit.ts";
 import { shortCircuitCurrent } from "../diode/current.ts";
 import { openCircuitVoltage } from "../diode/junction-at-current.ts";
-import { maximumPower } from "../diode/maximum-power.ts";
+import { emptyPoint, maximumPower } from "../diode/maximum-power.ts";
 import type { Module } from "../module/module.ts";
 
 /** Modules in series x strings in parallel, and the wiring between array and converter. */
@@ -64,7 +64,7 @@ function standardPoint(module: Module, modulesInSeries: number, stringsInParalle
   module.circuitAt(STANDARD_IRRADIANCE, STANDARD_TEMPERATURE + 10, circuit);
   const warmVoltage = openCircuitVoltage(circuit);
   module.circuitAt(STANDARD_IRRADIANCE, STANDARD_TEMPERATURE, circuit);
-  const point = { voltage: 0, current: 0, power: 0 };
+  const point = emptyPoint();
   maximumPower(circuit, point);
   return {
     maximumPowerVoltage: point.voltage * modulesInSeries,

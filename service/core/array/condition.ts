@@ -3,7 +3,7 @@ import { emptyCircuit } from "../diode/circuit.ts";
 import { shortCircuitCurrent } from "../diode/current.ts";
 import { openCircuitVoltage } from "../diode/junction-at-current.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
-import { maximumPower } from "../diode/maximum-power.ts";
+import { emptyPoint, maximumPower } from "../diode/maximum-power.ts";
 import type { PhotovoltaicArray } from "./array.ts";
 
 /** An array in one weather, seen at the converter's terminals. */
@@ -22,7 +22,7 @@ export interface Condition {
 export function emptyCondition(): Condition {
   return {
     circuit: emptyCircuit(),
-    maximum: { voltage: 0, current: 0, power: 0 },
+    maximum: emptyPoint(),
     irradiance: 0,
     cellTemperature: 0,
     openCircuitVoltage: 0,

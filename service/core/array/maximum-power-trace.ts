@@ -1,5 +1,5 @@
 import { emptyCircuit } from "../diode/circuit.ts";
-import { maximumPower } from "../diode/maximum-power.ts";
+import { emptyPoint, maximumPower } from "../diode/maximum-power.ts";
 import type { PhotovoltaicArray } from "./array.ts";
 
 /** Columns of one operating point a sample: V, A, W, each of shape [n]. */
@@ -31,7 +31,7 @@ export function maximumPowerTrace(
   trace: PointTrace,
 ): void {
   const circuit = emptyCircuit();
-  const point = { voltage: 0, current: 0, power: 0 };
+  const point = emptyPoint();
   for (let i = 0; i < irradiance.length; i++) {
     array.circuitAt(irradiance[i], cellTemperature[i], circuit);
     maximumPower(circuit, point);

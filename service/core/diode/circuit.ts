@@ -29,13 +29,19 @@ export function circuitOf(parameters: CircuitParameters): Circuit {
   return { ...parameters, saturationCurrent: Math.exp(parameters.logSaturationCurrent) };
 }
 
-/** A dark circuit to be written into. */
+/**
+ * A dark circuit to be written into. Its members begin as fractions: one that begins as a small integer is kept as a
+ * reference by the engine, and every later write would allocate a number.
+ */
 export function emptyCircuit(): Circuit {
-  return circuitOf({
-    photocurrent: 0,
-    logSaturationCurrent: -20,
-    idealityVoltage: 1,
-    seriesResistance: 0,
-    shuntConductance: 0,
-  });
+  const circuit = {
+    photocurrent: 0.5,
+    logSaturationCurrent: -20.5,
+    idealityVoltage: 1.5,
+    seriesResistance: 0.5,
+    shuntConductance: 0.5,
+    saturationCurrent: 1.25e-9,
+  };
+  circuit.photocurrent = 0;
+  return circuit;
 }

@@ -7,6 +7,13 @@ export interface OperatingPoint {
   power: number;
 }
 
+/** A point to be written into, all 0. Its members begin as fractions, for the reason given at `emptyCircuit`. */
+export function emptyPoint(): OperatingPoint {
+  const point = { voltage: 0.5, current: 0.5, power: 0.5 };
+  point.voltage = point.current = point.power = 0;
+  return point;
+}
+
 const MAXIMUM_STEPS = 64;
 /** A Halley step this small, in units of a, leaves an error below 1e-12 a (cubic convergence). */
 const LAST_STEP = 1e-4;

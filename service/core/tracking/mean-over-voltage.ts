@@ -1,4 +1,5 @@
 import type { OperatingPoint } from "../diode/maximum-power.ts";
+import { emptyPoint } from "../diode/maximum-power.ts";
 import { GAUSS_8, GAUSS_16 } from "../numeric/gauss-legendre.ts";
 import type { Terminals } from "./terminals.ts";
 
@@ -12,7 +13,7 @@ function addSmooth(
   weight: number,
   sum: OperatingPoint,
 ): void {
-  const point = { voltage: 0, current: 0, power: 0 };
+  const point = emptyPoint();
   for (let k = 0; k < GAUSS_8.nodes.length; k++) {
     terminals.operate(0.5 * (low + high) + 0.5 * (high - low) * GAUSS_8.nodes[k], point);
     addPoint(sum, point, weight * GAUSS_8.weights[k]);
@@ -29,7 +30,7 @@ function addPiece(
   weight: number,
   sum: OperatingPoint,
 ): void {
-  const point = { voltage: 0, current: 0, power: 0 };
+  const point = emptyPoint();
   for (let k = 0; k < GAUSS_16.nodes.length; k++) {
     const s = 0.5 * (1 + GAUSS_16.nodes[k]);
     terminals.operate(terminals.clamp(low + (high - low) * s * s * (3 - 2 * s)), point);

@@ -1,6 +1,7 @@
 import { conditionVoc } from "../array/condition.ts";
 import { currentAt } from "../diode/current.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
+import { emptyPoint } from "../diode/maximum-power.ts";
 import { bracketedRoot } from "../numeric/bracketed-root.ts";
 import type { ClimbingRule } from "../rules/rule.ts";
 import { climbOn, firstSight } from "./climber.ts";
@@ -56,8 +57,8 @@ function restingEdge(terminals: Terminals, { step, restTolerance }: ClimbingRule
 
 /** Adds 1/64 of the mean point of the orbit entered at `from` (V). */
 function addOrbit(terminals: Terminals, rule: ClimbingRule, from: number, mean: OperatingPoint): void {
-  const point = { voltage: 0, current: 0, power: 0 };
-  const turn = { voltage: 0, current: 0, power: 0 };
+  const point = emptyPoint();
+  const turn = emptyPoint();
   const seen = firstSight();
   let voltage = terminals.clamp(from);
   // A turn is closed when voltage, the one before and the direction recur: all that a decision depends on. The state

@@ -2,6 +2,7 @@ import type { PhotovoltaicArray } from "../array/array.ts";
 import { conditionVoc, emptyCondition, enterCondition } from "../array/condition.ts";
 import type { PointTrace } from "../array/maximum-power-trace.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
+import { emptyPoint } from "../diode/maximum-power.ts";
 import type { ClimbingRule, Sampling, TargetRule, TrackingRule } from "../rules/rule.ts";
 import type { Cascade } from "./causes.ts";
 import type { Converter } from "./converter.ts";
@@ -48,7 +49,7 @@ export function trackSteady(
   const condition = emptyCondition();
   const seats = contenders.map((contender) => ({ ...contender, terminals: new Terminals(contender.converter) }));
   const cascade = emptyCascade();
-  const point = { voltage: 0, current: 0, power: 0 };
+  const point = emptyPoint();
   const place = { sample: 0, span: 0, irradianceClass: 0 };
 
   for (let i = 0; i < irradiance.length; i++) {

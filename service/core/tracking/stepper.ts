@@ -3,7 +3,7 @@ import type { Condition } from "../array/condition.ts";
 import { conditionVoc, emptyCondition } from "../array/condition.ts";
 import { FollowingCurrent } from "../diode/following-current.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
-import { maximumPower } from "../diode/maximum-power.ts";
+import { emptyPoint, maximumPower } from "../diode/maximum-power.ts";
 import type { Seen } from "../rules/rule.ts";
 import { climbOn, firstSight } from "./climber.ts";
 import type { SteppingKind } from "./followed.ts";
@@ -46,7 +46,7 @@ export class Stepper {
   /** Neither limits nor ripple: the array's own current at the held voltage. */
   private readonly plain: boolean;
   private readonly following = new FollowingCurrent();
-  private readonly point: OperatingPoint = { voltage: 0, current: 0, power: 0 };
+  private readonly point: OperatingPoint = emptyPoint();
   private readonly place: Place = { left: 0, right: 0, share: 0 };
   private readonly clock: SampleClock | null;
   private seen: Seen = firstSight();

@@ -1,5 +1,6 @@
 import { conditionIsc, conditionVoc } from "../array/condition.ts";
 import { voltageAtCurrent } from "../diode/junction-at-current.ts";
+import { emptyPoint } from "../diode/maximum-power.ts";
 import type { Sampling, TargetRule } from "../rules/rule.ts";
 import { readPower } from "./climber.ts";
 import { readingOf, valueReadAs } from "./converter.ts";
@@ -23,7 +24,7 @@ function bestSwept(points: number, terminals: Terminals): number {
   const { trackingMinimumVoltage, trackingMaximumVoltage } = terminals.converter;
   const low = Math.max(0, trackingMinimumVoltage);
   const high = Math.max(low, Math.min(trackingMaximumVoltage, conditionVoc(terminals.condition)));
-  const point = { voltage: 0, current: 0, power: 0 };
+  const point = emptyPoint();
   let best = low;
   let bestPower = 0;
   for (let k = 0; k < points; k++) {

@@ -3,6 +3,7 @@ import { conditionIsc, conditionVoc } from "../array/condition.ts";
 import { currentAt, powerAt } from "../diode/current.ts";
 import { voltageAtCurrent } from "../diode/junction-at-current.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
+import { emptyPoint } from "../diode/maximum-power.ts";
 import { bracketedRoot } from "../numeric/bracketed-root.ts";
 import type { Converter } from "./converter.ts";
 import { meanOverRipple, ripplePeak } from "./ripple.ts";
@@ -116,7 +117,7 @@ export class Terminals {
   private limitCrossings(voc: number): number[] {
     const { maximumPower, rippleAmplitude } = this.converter;
     if (this.condition.maximum.power <= maximumPower) return [];
-    const point = { voltage: 0, current: 0, power: 0 };
+    const point = emptyPoint();
     const excess = (voltage: number): number => {
       if (rippleAmplitude === 0) return powerAt(this.condition.circuit, voltage) - maximumPower;
       this.ripple(voltage, point);

@@ -1,4 +1,5 @@
 import type { OperatingPoint } from "../diode/maximum-power.ts";
+import { emptyPoint } from "../diode/maximum-power.ts";
 import { addMeanOver, addPoint, isSmooth } from "./mean-over-voltage.ts";
 import type { Terminals } from "./terminals.ts";
 
@@ -23,7 +24,7 @@ export function threeLevelOrbit(terminals: Terminals, peak: number, step: number
   mean.voltage = mean.current = mean.power = 0;
   const narrow = step <= NARROW * terminals.condition.circuit.idealityVoltage;
   if (narrow && isSmooth(terminals, peak - 1.5 * step, peak + 1.5 * step)) {
-    const point = { voltage: 0, current: 0, power: 0 };
+    const point = emptyPoint();
     for (let k = 0; k < NODES.length; k++) {
       terminals.operate(peak + step * NODES[k], point);
       addPoint(mean, point, WEIGHTS[k]);
