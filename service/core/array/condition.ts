@@ -23,10 +23,10 @@ export function emptyCondition(): Condition {
   return {
     circuit: emptyCircuit(),
     maximum: emptyPoint(),
-    irradiance: 0,
-    cellTemperature: 0,
-    openCircuitVoltage: 0,
-    shortCircuitCurrent: 0,
+    irradiance: Number.NaN,
+    cellTemperature: Number.NaN,
+    openCircuitVoltage: Number.NaN,
+    shortCircuitCurrent: Number.NaN,
   };
 }
 

@@ -14,8 +14,8 @@ const SMALL_MOVE = 0.02;
  */
 export class FollowingCurrent {
   private junction = Number.NaN;
-  private voltage = 0;
-  private slope = 0;
+  private voltage = Number.NaN;
+  private slope = Number.NaN;
 
   at(circuit: Circuit, voltage: number): number {
     const { seriesResistance, shuntConductance } = circuit;

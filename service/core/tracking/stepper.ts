@@ -5,7 +5,9 @@ import { FollowingCurrent } from "../diode/following-current.ts";
 import type { OperatingPoint } from "../diode/maximum-power.ts";
 import { emptyPoint, maximumPower } from "../diode/maximum-power.ts";
 import type { Seen } from "../rules/rule.ts";
+import { climbAlong } from "./climb-along.ts";
 import { climbOn, firstSight } from "./climber.ts";
+import { isExact } from "./converter.ts";
 import type { SteppingKind } from "./followed.ts";
 import { FOLLOWED, FOLLOWED_COUNT, followedTolerances, tallyFollowed } from "./followed.ts";
 import type { Periods } from "./period-grid.ts";
@@ -45,14 +47,16 @@ export class Stepper {
   private readonly limited: boolean;
   /** Neither limits nor ripple: the array's own current at the held voltage. */
   private readonly plain: boolean;
+  /** A climber with nothing between it and the array, see `climbAlong`. */
+  private readonly free: boolean;
   private readonly following = new FollowingCurrent();
   private readonly point: OperatingPoint = emptyPoint();
   private readonly place: Place = { left: 0, right: 0, share: 0 };
   private readonly clock: SampleClock | null;
   private seen: Seen = firstSight();
   private asleep = true;
-  private reading = 0;
-  private voltage = 0;
+  private reading = Number.NaN;
+  private voltage = Number.NaN;
 
   constructor(contender: Contender, array: PhotovoltaicArray, weather: TimedWeather) {
     const { rule, converter } = contender;
@@ -71,6 +75,8 @@ export class Stepper {
     this.holdsFresh = !this.smooth && sampling !== null && sampling.pilot;
     this.kind = { behaviour: rule.behaviour, smooth: this.smooth, holdsFresh: this.holdsFresh };
     this.tolerances = followedTolerances(contender);
+    const exact = isExact(converter.voltageSensor) && isExact(converter.currentSensor);
+    this.free = this.plain && exact && this.clock === null && converter.wakePower === 0 && !this.tally.keepsExtremes;
   }
 
   /** Writes what the stepper follows of a condition (see `FOLLOWED`). */
@@ -120,6 +126,13 @@ export class Stepper {
     tallyFollowed(this.tally, stretch, { grid: this.grid, periods, base }, this.kind);
     if (this.smooth) return;
     const { circuit } = this.condition;
+    const { rule, converter } = this.contender;
+    if (this.free && rule.behaviour === "climb") {
+      if (this.asleep) this.wakeIn(stretch, periods.first);
+      const climb = { rule, converter, circuit, following: this.following, seen: this.seen };
+      this.voltage = climbAlong(climb, this.voltage, { stretch, grid: this.grid, periods }, this.tally);
+      return;
+    }
     for (let k = periods.first; k < periods.end; k++) {
       const time = this.grid.middleOf(k);
       stretch.circuitAt(time, circuit);
@@ -214,10 +227,19 @@ export class Stepper {
     tallyPoint(this.tally, this.point, weight, idle ? 1 : this.interruptedShare(k, weight));
   }
 
+  /** Wakes in the circuit of a stretch at the middle of period `k`. */
+  private wakeIn(stretch: Stretch, k: number): void {
+    stretch.circuitAt(this.grid.middleOf(k), this.condition.circuit);
+    this.condition.openCircuitVoltage = Number.NaN;
+    this.terminals.condition = this.condition;
+    this.wake(k);
+  }
+
   private wake(k: number): void {
     this.asleep = false;
     this.clock?.wake(k * this.grid.period);
     this.seen = firstSight();
+    this.reading = 0;
     this.voltage = this.terminals.clamp(conditionVoc(this.condition));
   }
 

@@ -15,8 +15,8 @@ export interface Tally {
   current: number;
   /** Periods awake. */
   lit: number;
-  /** Voltage, current and power of the array's maximum. */
-  readonly maximum: [number, number, number];
+  /** Voltage, current and power of the array's maximum, shape [3]. */
+  readonly maximum: Float64Array;
   /** Periods in the light. */
   sunlit: number;
   /** Least and most voltage and delivered power of a period; kept only when `keepsExtremes`. */
@@ -27,27 +27,29 @@ export interface Tally {
   mostPower: number;
 }
 
-/** Nothing yet. */
+/** Nothing yet. Its sums begin as fractions, for the reason given at `emptyCircuit`. */
 export function emptyTally(keepsExtremes: boolean): Tally {
-  return {
-    available: 0,
-    clipped: 0,
-    best: 0,
-    fresh: 0,
-    held: 0,
-    operating: 0,
-    interrupted: 0,
-    voltage: 0,
-    current: 0,
-    lit: 0,
-    maximum: [0, 0, 0],
-    sunlit: 0,
+  const tally: Tally = {
+    available: 0.5,
+    clipped: 0.5,
+    best: 0.5,
+    fresh: 0.5,
+    held: 0.5,
+    operating: 0.5,
+    interrupted: 0.5,
+    voltage: 0.5,
+    current: 0.5,
+    lit: 0.5,
+    maximum: new Float64Array(3),
+    sunlit: 0.5,
     keepsExtremes,
-    leastVoltage: Number.POSITIVE_INFINITY,
-    mostVoltage: Number.NEGATIVE_INFINITY,
-    leastPower: Number.POSITIVE_INFINITY,
-    mostPower: Number.NEGATIVE_INFINITY,
+    leastVoltage: 0.5,
+    mostVoltage: 0.5,
+    leastPower: 0.5,
+    mostPower: 0.5,
   };
+  clearTally(tally);
+  return tally;
 }
 
 /** Back to nothing. */

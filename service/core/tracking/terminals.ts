@@ -18,17 +18,18 @@ export class Terminals {
   readonly converter: Converter;
   condition!: Condition;
   /** Lowest voltage the current limit allows, V. */
-  floor = 0;
+  floor = Number.NaN;
   /** Most the array could deliver within the limits, W. */
-  available = 0;
+  available = Number.NaN;
   /** What the limits cut off the array's maximum, W. */
-  clipped = 0;
+  clipped = Number.NaN;
   /** The best voltage inside the window, V, and its power, W. */
-  bestVoltage = 0;
-  best = 0;
+  bestVoltage = Number.NaN;
+  best = Number.NaN;
 
   constructor(converter: Converter) {
     this.converter = converter;
+    this.floor = 0;
   }
 
   /** Takes on a lit condition. */
