@@ -41,6 +41,8 @@ export type {
   LimitsInForce,
   LossAt,
   LostByCause,
+  LostPowerByCause,
+  LostShareByCause,
   MeasuredCircuit,
   MeasuredCurve,
   Misfits,

@@ -620,7 +620,7 @@ export interface components {
             irradiance: number;
             /** @description Share of the maximum power at 1000 W/m2. Unit: 1. */
             level: number;
-            lostByCause: components["schemas"]["LostByCause"] & unknown;
+            lostByCause: components["schemas"]["LostShareByCause"];
         };
         /** @description One row of a dynamic test. */
         EfficiencyRow: {
@@ -628,7 +628,7 @@ export interface components {
             duration: number;
             /** @description Delivered over available energy. Unit: 1. */
             efficiency: number;
-            lostByCause: components["schemas"]["LostByCause"] & unknown;
+            lostByCause: components["schemas"]["LostShareByCause"];
             /** @description How often up and down. Unit: 1. */
             repetitions: number;
             /** @description Slope of the ramps. Unit: W/m2/s. */
@@ -960,6 +960,36 @@ export interface components {
             /** @description The maximum lies outside the converter's voltage window. Unit: kWh. */
             voltageWindow: number;
             /** @description The rule sits on a lower peak of the power curve. Unit: kWh. */
+            wrongPeak: number;
+        };
+        /** @description Lost power by cause; the six add up to what is lost. */
+        LostPowerByCause: {
+            /** @description The reference is stale: held from the last sample. Unit: W. */
+            heldSample: number;
+            /** @description Nothing is delivered while sampling, sweeping or asleep. Unit: W. */
+            interruption: number;
+            /** @description Steps, hunting and ripple around the target. Unit: W. */
+            regulation: number;
+            /** @description The rule's own target misses the maximum. Unit: W. */
+            setPoint: number;
+            /** @description The maximum lies outside the converter's voltage window. Unit: W. */
+            voltageWindow: number;
+            /** @description The rule sits on a lower peak of the power curve. Unit: W. */
+            wrongPeak: number;
+        };
+        /** @description Lost shares of the available energy by cause. */
+        LostShareByCause: {
+            /** @description The reference is stale: held from the last sample. Unit: 1. */
+            heldSample: number;
+            /** @description Nothing is delivered while sampling, sweeping or asleep. Unit: 1. */
+            interruption: number;
+            /** @description Steps, hunting and ripple around the target. Unit: 1. */
+            regulation: number;
+            /** @description The rule's own target misses the maximum. Unit: 1. */
+            setPoint: number;
+            /** @description The maximum lies outside the converter's voltage window. Unit: 1. */
+            voltageWindow: number;
+            /** @description The rule sits on a lower peak of the power curve. Unit: 1. */
             wrongPeak: number;
         };
         /** @description Null for a datasheet. */
@@ -1731,7 +1761,7 @@ export interface components {
             current: number;
             /** @description What it leaves of the maximum. Unit: W. */
             lost: number;
-            lostByCause: components["schemas"]["LostByCause"] & unknown;
+            lostByCause: components["schemas"]["LostPowerByCause"];
             /** @description Mean power delivered, interruptions counted. Unit: W. */
             power: number;
             rule: components["schemas"]["ResolvedRule"];
@@ -2086,6 +2116,8 @@ export type KingModel = components['schemas']['KingModel'];
 export type LimitsInForce = components['schemas']['LimitsInForce'];
 export type LossAt = components['schemas']['LossAt'];
 export type LostByCause = components['schemas']['LostByCause'];
+export type LostPowerByCause = components['schemas']['LostPowerByCause'];
+export type LostShareByCause = components['schemas']['LostShareByCause'];
 export type MeasuredCircuit = components['schemas']['MeasuredCircuit'];
 export type MeasuredCurve = components['schemas']['MeasuredCurve'];
 export type Misfits = components['schemas']['Misfits'];

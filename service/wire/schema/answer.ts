@@ -36,6 +36,16 @@ export const LostByCauseSchema = z.object(perCause((meaning) => reported("kWh", 
   description: "Lost energy by cause; the six add up to what is lost. One may be negative.",
 });
 
+/** Lost power by cause: what a rule at rest leaves. */
+export const LostPowerByCauseSchema = z
+  .object(perCause((meaning) => reported("W", meaning)))
+  .openapi("LostPowerByCause", { description: "Lost power by cause; the six add up to what is lost." });
+
+/** Lost shares of the available energy by cause. */
+export const LostShareByCauseSchema = z
+  .object(perCause((meaning) => reported("1", meaning)))
+  .openapi("LostShareByCause", { description: "Lost shares of the available energy by cause." });
+
 /** One calendar month. */
 export const MonthSchema = z
   .object({

@@ -1,5 +1,5 @@
 import { z } from "@hono/zod-openapi";
-import { LostByCauseSchema, ModuleAnswerSchema, ProvenanceSchema } from "./answer.ts";
+import { LostPowerByCauseSchema, ModuleAnswerSchema, ProvenanceSchema } from "./answer.ts";
 import { ArraySchema } from "./array.ts";
 import { reportedColumn } from "./column.ts";
 import { ConverterSchema } from "./converter.ts";
@@ -39,7 +39,7 @@ const RulePlaceSchema = z
     current: reported("A", "Mean current, interruptions counted."),
     power: reported("W", "Mean power delivered, interruptions counted."),
     lost: reported("W", "What it leaves of the maximum."),
-    lostByCause: LostByCauseSchema.openapi({ description: "In W here: lost power by cause." }),
+    lostByCause: LostPowerByCauseSchema,
   })
   .openapi("RulePlace", { description: "Where a rule sits at rest." });
 

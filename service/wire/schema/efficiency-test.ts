@@ -1,6 +1,6 @@
 import { z } from "@hono/zod-openapi";
 import {
-  LostByCauseSchema,
+  LostShareByCauseSchema,
   ModuleAnswerSchema,
   PointTraceSchema,
   ProvenanceSchema,
@@ -41,15 +41,13 @@ export const EfficiencyTestRequestSchema = z
   })
   .openapi("EfficiencyTestRequest", { description: "One module, one rule, one of the standard's tests." });
 
-const SHARES = { description: "As shares of the available energy here; unit: 1." };
-
 const EfficiencyRowSchema = z
   .object({
     slope: reported("W/m2/s", "Slope of the ramps."),
     repetitions: reported("1", "How often up and down."),
     duration: reported("s", "With 300 s of settling, which does not count."),
     efficiency: reported("1", "Delivered over available energy."),
-    lostByCause: LostByCauseSchema.openapi(SHARES),
+    lostByCause: LostShareByCauseSchema,
   })
   .openapi("EfficiencyRow", { description: "One row of a dynamic test." });
 
@@ -58,7 +56,7 @@ const EfficiencyLevelSchema = z
     level: reported("1", "Share of the maximum power at 1000 W/m2."),
     irradiance: reported("W/m2", "At which the module gives that power."),
     efficiency: reported("1", "Delivered over available power at rest."),
-    lostByCause: LostByCauseSchema.openapi(SHARES),
+    lostByCause: LostShareByCauseSchema,
   })
   .openapi("EfficiencyLevel", { description: "One level of the static test." });
 
